@@ -5,7 +5,6 @@ export const up: Migration = async ({ context: database }) => {
     CREATE TABLE IF NOT EXISTS works (
       id BIGINT UNSIGNED NOT NULL AUTO_INCREMENT PRIMARY KEY,
       workKey BINARY(16) NOT NULL,
-      keyText VARCHAR(600) CHARACTER SET utf8mb4 COLLATE utf8mb4_bin NOT NULL,
       catalogued TINYINT(1) NOT NULL,
       type VARCHAR(20) CHARACTER SET ascii COLLATE ascii_bin NOT NULL DEFAULT 'other',
       title TEXT NULL,

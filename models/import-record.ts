@@ -14,6 +14,7 @@ export class ImportRecord extends Model<InferAttributes<ImportRecord>, InferCrea
   declare fields: CreationOptional<string | null>;
   declare outcome: CreationOptional<'new' | 'known' | 'review' | 'rejected' | null>;
   declare catalogued: CreationOptional<boolean>;
+  declare citing: CreationOptional<boolean>;
   declare referenceCount: CreationOptional<number>;
   declare workId: CreationOptional<number | null>;
 }
@@ -30,6 +31,7 @@ ImportRecord.init(
     fields: { type: DataTypes.TEXT('long'), allowNull: true },
     outcome: { type: DataTypes.STRING(8), allowNull: true },
     catalogued: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
+    citing: { type: DataTypes.BOOLEAN, allowNull: false, defaultValue: false },
     referenceCount: { type: DataTypes.INTEGER.UNSIGNED, allowNull: false, defaultValue: 0 },
     workId: { type: DataTypes.BIGINT.UNSIGNED, allowNull: true },
   },

@@ -6,11 +6,11 @@ import { database } from '@/lib/db/connection';
 export class ReferenceVariant extends Model<InferAttributes<ReferenceVariant>, InferCreationAttributes<ReferenceVariant>> {
   declare hash: Buffer;
   declare doi: CreationOptional<string | null>;
-  declare doiKey: CreationOptional<Buffer | null>;
+  declare pmid: CreationOptional<string | null>;
+  declare identifierKey: CreationOptional<Buffer | null>;
   declare fieldKey: CreationOptional<Buffer | null>;
   declare titleKey: CreationOptional<Buffer | null>;
   declare ownKey: Buffer;
-  declare keyText: string;
   declare author: CreationOptional<string | null>;
   declare family: CreationOptional<string | null>;
   declare year: CreationOptional<number | null>;
@@ -29,11 +29,11 @@ ReferenceVariant.init(
   {
     hash: { type: 'BINARY(16)', allowNull: false, primaryKey: true },
     doi: { type: DataTypes.STRING(300), allowNull: true },
-    doiKey: { type: 'BINARY(16)', allowNull: true },
+    pmid: { type: DataTypes.STRING(20), allowNull: true },
+    identifierKey: { type: 'BINARY(16)', allowNull: true },
     fieldKey: { type: 'BINARY(16)', allowNull: true },
     titleKey: { type: 'BINARY(16)', allowNull: true },
     ownKey: { type: 'BINARY(16)', allowNull: false },
-    keyText: { type: DataTypes.STRING(600), allowNull: false },
     author: { type: DataTypes.STRING(200), allowNull: true },
     family: { type: DataTypes.STRING(120), allowNull: true },
     year: { type: DataTypes.SMALLINT, allowNull: true },

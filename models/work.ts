@@ -7,7 +7,6 @@ import { database } from '@/lib/db/connection';
 export class Work extends Model<InferAttributes<Work>, InferCreationAttributes<Work>> {
   declare id: CreationOptional<number>;
   declare workKey: Buffer;
-  declare keyText: string;
   declare catalogued: boolean;
   declare type: CreationOptional<WorkType>;
   declare title: CreationOptional<string | null>;
@@ -42,7 +41,6 @@ Work.init(
   {
     id: { type: DataTypes.BIGINT.UNSIGNED, allowNull: false, autoIncrement: true, primaryKey: true },
     workKey: { type: 'BINARY(16)', allowNull: false },
-    keyText: { type: DataTypes.STRING(600), allowNull: false },
     catalogued: { type: DataTypes.BOOLEAN, allowNull: false },
     type: { type: DataTypes.STRING(20), allowNull: false, defaultValue: 'other' },
     title: { type: DataTypes.TEXT, allowNull: true },

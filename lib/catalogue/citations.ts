@@ -1,0 +1,51 @@
+import { type Transaction } from 'sequelize';
+
+import { run } from '@/lib/db/bulk';
+
+const pairs = `
+  SELECT record.workId AS citingWorkId, variant.workId AS citedWorkId, COUNT(*) AS referenceCount
+  FROM import_records record
+  JOIN cited_references reference ON reference.recordId = record.id
+  JOIN reference_variants variant ON variant.hash = reference.variantHash`;
+
+/**
+ * Derives the citation rows again: all of the touched works' own, and all that lead to a work that gained or lost a variant.
+ * A work that cites itself is a fault of linking and gives no citation.
+ */
+export async function rebuildCitations(transaction: Transaction): Promise<void> {
+  // Whoever is cited less after this must be counted anew as well.
+  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS counted_works');
+  await run(transaction, 'CREATE TEMPORARY TABLE counted_works (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB');
+  const count = async () => {
+    await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citedWorkId FROM touched_works touched JOIN citations citation ON citation.citingWorkId = touched.id');
+    await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citingWorkId FROM moved_targets moved JOIN citations citation ON citation.citedWorkId = moved.id');
+  };
+  await count();
+  await run(transaction, 'DELETE citation FROM citations citation JOIN touched_works touched ON touched.id = citation.citingWorkId');
+  await run(transaction, 'DELETE citation FROM citations citation JOIN moved_targets moved ON moved.id = citation.citedWorkId');
+  await run(
+    transaction,
+    `INSERT INTO citations (citingWorkId, citedWorkId, referenceCount) ${pairs}
+     JOIN touched_works touched ON touched.id = record.workId
+     WHERE record.citing = 1 AND variant.workId IS NOT NULL AND variant.workId <> record.workId GROUP BY record.workId, variant.workId`,
+  );
+  await run(
+    transaction,
+    `INSERT IGNORE INTO citations (citingWorkId, citedWorkId, referenceCount)
+     SELECT record.workId, variant.workId, COUNT(*)
+     FROM moved_targets moved JOIN reference_variants variant ON variant.workId = moved.id
+     JOIN cited_references reference ON reference.variantHash = variant.hash
+     JOIN import_records record ON record.id = reference.recordId AND record.citing = 1
+     WHERE variant.workId <> record.workId GROUP BY record.workId, variant.workId`,
+  );
+  await count();
+  await run(transaction, 'INSERT IGNORE INTO counted_works SELECT id FROM touched_works');
+  await run(transaction, 'INSERT IGNORE INTO counted_works SELECT id FROM moved_targets');
+  await run(
+    transaction,
+    `UPDATE works work JOIN counted_works counted ON counted.id = work.id
+     SET work.citedCount = (SELECT COUNT(*) FROM citations citation WHERE citation.citedWorkId = work.id),
+         work.citingCount = (SELECT COUNT(*) FROM citations citation WHERE citation.citingWorkId = work.id)`,
+  );
+  await run(transaction, 'DROP TEMPORARY TABLE counted_works');
+}

@@ -1,0 +1,139 @@
+import { type Transaction } from 'sequelize';
+
+import { type CatalogueProgress } from '@/lib/catalogue/apply';
+import { settleCitedOnly, temporaryIds } from '@/lib/catalogue/works';
+import { insertRows, run, select, selectIn, type Cell } from '@/lib/db/bulk';
+import { resolveVariants, type CataloguedTarget, type VariantInput } from '@/lib/linking/resolve';
+
+const hex = (buffer: Buffer | null): string | null => (buffer ? buffer.toString('hex') : null);
+
+interface VariantRow {
+  hash: Buffer;
+  doi: string | null;
+  identifierKey: Buffer | null;
+  fieldKey: Buffer | null;
+  titleKey: Buffer | null;
+  ownKey: Buffer;
+  workId: number | null;
+  how: string | null;
+}
+
+/** Counts the references in use and gathers every variant whose target may change. */
+async function touchVariants(transaction: Transaction): Promise<void> {
+  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS touched_variants');
+  await run(transaction, 'CREATE TEMPORARY TABLE touched_variants (hash BINARY(16) NOT NULL PRIMARY KEY, step INT NOT NULL DEFAULT 0) ENGINE = InnoDB');
+  await run(
+    transaction,
+    `INSERT INTO touched_variants (hash, step)
+     SELECT reference.variantHash, SUM(turned.step) FROM turned_records turned JOIN cited_references reference ON reference.recordId = turned.id GROUP BY reference.variantHash`,
+  );
+  await run(transaction, 'UPDATE reference_variants variant JOIN touched_variants touched ON touched.hash = variant.hash SET variant.standing = variant.standing + touched.step WHERE touched.step <> 0');
+  for (const column of ['identifierKey', 'fieldKey', 'titleKey']) {
+    await run(
+      transaction,
+      `INSERT IGNORE INTO touched_variants (hash)
+       SELECT DISTINCT variant.hash FROM touched_records touched JOIN record_keys own ON own.recordId = touched.id AND own.kind IN (1, 3)
+       JOIN reference_variants variant ON variant.${column} = own.keyHash`,
+    );
+  }
+  // All variants of one identifier are resolved together; one without an identifier looks at those that share its key. See resolveVariants.
+  for (const column of ['identifierKey', 'fieldKey', 'titleKey', 'identifierKey']) {
+    const extra = column === 'titleKey' ? 'AND (other.fieldKey IS NULL OR other.identifierKey IS NOT NULL)' : '';
+    await run(
+      transaction,
+      `INSERT IGNORE INTO touched_variants (hash)
+       SELECT DISTINCT other.hash FROM touched_variants touched JOIN reference_variants own ON own.hash = touched.hash AND own.${column} IS NOT NULL
+       JOIN reference_variants other ON other.${column} = own.${column} ${extra}`,
+    );
+  }
+}
+
+async function cataloguedTargets(transaction: Transaction): Promise<Map<string, CataloguedTarget[]>> {
+  const targets = new Map<string, Map<number, CataloguedTarget>>();
+  for (const column of ['identifierKey', 'fieldKey', 'titleKey']) {
+    const rows = await select<{ keyHash: Buffer; workId: number; workKey: Buffer; doi: string | null }>(
+      transaction,
+      `SELECT DISTINCT own.keyHash, work.id AS workId, work.workKey, work.doi
+       FROM (SELECT DISTINCT variant.${column} AS keyHash FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.${column} IS NOT NULL AND variant.standing > 0) wanted
+       JOIN record_keys own ON own.keyHash = wanted.keyHash AND own.kind IN (1, 3)
+       JOIN import_records record ON record.id = own.recordId AND record.catalogued = 1
+       JOIN works work ON work.id = record.workId`,
+    );
+    for (const row of rows) {
+      const key = row.keyHash.toString('hex');
+      const works = targets.get(key) ?? new Map<number, CataloguedTarget>();
+      works.set(row.workId, { workId: row.workId, key: row.workKey.toString('hex'), doi: row.doi });
+      targets.set(key, works);
+    }
+  }
+  return new Map([...targets].map(([key, works]) => [key, [...works.values()]]));
+}
+
+/** Rows of cited-only works by key, made where they are missing. */
+async function citedOnlyWorks(transaction: Transaction, keys: Set<string>): Promise<Map<string, number>> {
+  const buffers = [...keys].sort().map((key) => Buffer.from(key, 'hex'));
+  await insertRows(transaction, 'INSERT IGNORE INTO works (workKey, catalogued)', buffers.map((key) => [key, 0]));
+  const rows = await selectIn<{ id: number; workKey: Buffer }, Buffer>(transaction, 'SELECT id, workKey FROM works WHERE workKey IN (?)', buffers);
+  return new Map(rows.map((row) => [row.workKey.toString('hex'), row.id]));
+}
+
+/**
+ * Links the references of all touched records, and all others that the change may have led elsewhere.
+ * Leaves behind the temporary table moved_targets: works whose citing works may have changed although no record of theirs was touched.
+ */
+export async function resolveTouchedVariants(transaction: Transaction, progress: CatalogueProgress): Promise<void> {
+  await progress('linking', 0, 3);
+  await touchVariants(transaction);
+  const rows = await select<VariantRow>(
+    transaction,
+    `SELECT variant.hash, variant.doi, variant.identifierKey, variant.fieldKey, variant.titleKey, variant.ownKey, variant.workId, variant.how
+     FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.standing > 0`,
+  );
+  const catalogue = await cataloguedTargets(transaction);
+  await progress('linking', 1, 3);
+  const inputs: VariantInput[] = rows.map((row) => ({
+    id: row.hash.toString('hex'),
+    doi: row.doi,
+    identifierKey: hex(row.identifierKey),
+    fieldKey: hex(row.fieldKey),
+    titleKey: hex(row.titleKey),
+    ownKey: row.ownKey.toString('hex'),
+  }));
+  const resolutions = resolveVariants(inputs, (key) => catalogue.get(key) ?? []);
+  const drawn = new Set<string>();
+  for (const resolution of resolutions.values()) if ('citedOnlyKey' in resolution) drawn.add(resolution.citedOnlyKey);
+  const drawnIds = await citedOnlyWorks(transaction, drawn);
+
+  const moves: Cell[][] = [];
+  const moved = new Set<number>();
+  const settle = new Set<number>(drawnIds.values());
+  rows.forEach((row, index) => {
+    const resolution = resolutions.get(inputs[index].id) as NonNullable<ReturnType<typeof resolutions.get>>;
+    const workId = 'workId' in resolution ? resolution.workId : (drawnIds.get(resolution.citedOnlyKey) as number);
+    if (row.workId === workId && row.how === resolution.how) return;
+    moves.push([row.hash, workId, resolution.how]);
+    if (row.workId !== null && row.workId !== workId) {
+      moved.add(row.workId).add(workId);
+      settle.add(row.workId);
+    }
+  });
+  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS moved_variants');
+  await run(transaction, 'CREATE TEMPORARY TABLE moved_variants (hash BINARY(16) NOT NULL PRIMARY KEY, workId BIGINT UNSIGNED NOT NULL, how VARCHAR(12) CHARACTER SET ascii COLLATE ascii_bin NOT NULL) ENGINE = InnoDB');
+  await insertRows(transaction, 'INSERT INTO moved_variants (hash, workId, how)', moves);
+  await run(transaction, 'UPDATE reference_variants variant JOIN moved_variants moved ON moved.hash = variant.hash SET variant.workId = moved.workId, variant.how = moved.how');
+  await run(transaction, 'DROP TEMPORARY TABLE moved_variants');
+  // Variants that nobody uses any more lead nowhere.
+  const idle = await select<{ workId: number }>(
+    transaction,
+    'SELECT DISTINCT variant.workId FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.standing = 0 AND variant.workId IS NOT NULL',
+  );
+  for (const { workId } of idle) settle.add(workId);
+  await run(transaction, 'UPDATE reference_variants variant JOIN touched_variants touched ON touched.hash = variant.hash SET variant.workId = NULL, variant.how = NULL WHERE variant.standing = 0 AND variant.workId IS NOT NULL');
+  await progress('linking', 2, 3);
+
+  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS moved_targets');
+  await run(transaction, 'CREATE TEMPORARY TABLE moved_targets (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB');
+  await insertRows(transaction, 'INSERT IGNORE INTO moved_targets (id)', [...moved].map((id) => [id]));
+  for (const id of await temporaryIds(transaction, 'touched_works')) settle.add(id);
+  await settleCitedOnly(transaction, [...settle].sort((a, b) => a - b));
+}
