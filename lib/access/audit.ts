@@ -1,6 +1,7 @@
 import { Op, type WhereOptions } from 'sequelize';
 
 import { clientAddress } from '@/lib/access/client-address';
+import { escapeLike } from '@/lib/access/escape-like';
 import { type Actor } from '@/lib/access/permissions';
 import { AuditEvent } from '@/models/audit-event';
 import { User } from '@/models/user';
@@ -43,7 +44,7 @@ export async function recordAudit(actor: Pick<Actor, 'userId'> | null, request: 
 /** The log, newest first; `q` is matched with the beginning of the action. */
 export async function listAudit({ page, pageSize, q, userId }: { page: number; pageSize: number; q?: string; userId?: number }) {
   const where: WhereOptions = {
-    ...(q ? { action: { [Op.startsWith]: q.toLowerCase() } } : {}),
+    ...(q ? { action: { [Op.like]: `${escapeLike(q.toLowerCase())}%` } } : {}),
     ...(userId ? { userId } : {}),
   };
   const { rows, count } = await AuditEvent.findAndCountAll({ where, order: [['createdAt', 'DESC'], ['id', 'DESC']], limit: pageSize, offset: (page - 1) * pageSize });

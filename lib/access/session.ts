@@ -44,11 +44,15 @@ export async function readSessionToken(value: string): Promise<SessionClaims | n
   return { userId: claims.userId, sessionVersion: claims.sessionVersion };
 }
 
-/** The person behind a session cookie as the users table has them now: null once disabled, or once the session's version has passed. */
-export async function actorOfSession(value: string): Promise<Actor | null> {
-  const claims = await readSessionToken(value);
-  if (!claims) return null;
+/** The person behind a session as the users table has them now: null once disabled, or once the session's version has passed. */
+export async function actorOfClaims(claims: SessionClaims): Promise<Actor | null> {
   const user = await User.findByPk(claims.userId, { attributes: ['id', 'name', 'email', 'role', 'sessionVersion', 'disabledAt'] });
   if (!user || user.disabledAt || user.sessionVersion !== claims.sessionVersion) return null;
   return { userId: user.id, name: user.name, email: user.email, role: user.role, via: 'session' };
+}
+
+/** The person behind a session cookie, or null. */
+export async function actorOfSession(value: string): Promise<Actor | null> {
+  const claims = await readSessionToken(value);
+  return claims && actorOfClaims(claims);
 }

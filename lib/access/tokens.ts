@@ -1,8 +1,9 @@
 import { Op } from 'sequelize';
 
+import { recordAudit } from '@/lib/access/audit';
 import { type Actor } from '@/lib/access/permissions';
 import { hashSecret, makeSecret } from '@/lib/access/secrets';
-import { conflict, notFound } from '@/lib/errors';
+import { conflict, forbidden, notFound } from '@/lib/errors';
 import { ApiToken } from '@/models/api-token';
 import { User } from '@/models/user';
 
@@ -52,7 +53,9 @@ export async function listTokens(actor: Actor, { page, pageSize }: { page: numbe
 }
 
 /** Makes a token; the only time that its secret is given out. `expiresInDays` null: until revoked. */
-export async function createToken(actor: Actor, { name, expiresInDays }: { name: string; expiresInDays: number | null }): Promise<TokenView & { secret: string }> {
+export async function createToken(actor: Actor, { name, expiresInDays }: { name: string; expiresInDays: number | null }, headers: Headers): Promise<TokenView & { secret: string }> {
+  // A token that could make others would outlive its own end.
+  if (actor.via === 'token') throw forbidden('A token cannot make tokens. Sign in to make one.');
   if ((await ApiToken.count({ where: { userId: actor.userId, revokedAt: null } })) >= mostTokens) throw conflict(`You hold ${mostTokens} tokens. Revoke one that you no longer need first.`);
   const secret = prefix + makeSecret();
   const token = await ApiToken.create({
@@ -62,11 +65,13 @@ export async function createToken(actor: Actor, { name, expiresInDays }: { name:
     hint: secret.slice(-4),
     expiresAt: expiresInDays === null ? null : new Date(Date.now() + expiresInDays * 86_400_000),
   });
+  await recordAudit(actor, { headers }, { action: 'token.created', subjectType: 'token', subjectId: String(token.id), details: { name } });
   return { ...presentToken(token), secret };
 }
 
 /** Revokes one of the person's own tokens; 404 for anybody else's. */
-export async function revokeToken(actor: Actor, tokenId: number): Promise<void> {
+export async function revokeToken(actor: Actor, tokenId: number, headers: Headers): Promise<void> {
   const [changed] = await ApiToken.update({ revokedAt: new Date() }, { where: { id: tokenId, userId: actor.userId, revokedAt: null } });
   if (changed === 0) throw notFound();
+  await recordAudit(actor, { headers }, { action: 'token.revoked', subjectType: 'token', subjectId: String(tokenId) });
 }
