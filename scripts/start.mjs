@@ -12,6 +12,7 @@ import { greets, portState } from './start/ports.mjs';
 import { runToEnd, stopLeftBehind, stopRunningSteps } from './start/processes.mjs';
 import { startService, waitUntilHealthy } from './start/service.mjs';
 import { keptSecret, prepareHome, readStartSettings, serviceEnvironment } from './start/settings.mjs';
+import { whenAskedToStop } from './start/signals.mjs';
 
 const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..');
 const demonstrationRoles = { admin: 'administrator', librarian: 'librarian', evaluator: 'evaluator', author: 'author', reader: 'reader' };
@@ -19,9 +20,11 @@ const demonstrationRoles = { admin: 'administrator', librarian: 'librarian', eva
 /** What runs and how to end it, in the order in which it was started. @type {{ name: string, stop: () => Promise<void> | void }[]} */
 const running = [];
 const interruption = new AbortController();
+/** @type {Promise<void> | undefined} */
+let stopped;
 
 surviveClosedOutput();
-for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => interrupt(signal));
+whenAskedToStop(interrupt, () => say('Already stopping; the database needs a moment to write everything to disk.'));
 
 try {
   await start();
@@ -41,7 +44,7 @@ async function start() {
   if (!lock.held) throw new Stop(`Heddle already runs from this clone (process ${lock.pid}). Stop that one first.`);
   running.push({ name: 'lock', stop: lock.release });
 
-  for (const name of ['web', 'worker']) await stopLeftBehind(path.join(home, `${name}.json`), { name, graceMs: 15_000 });
+  for (const name of ['web', 'worker']) await stopLeftBehind(path.join(home, `${name}.json`), { name: name === 'web' ? 'web server' : name, graceMs: 15_000 });
   await requireFreePort(settings);
   for (const name of ['web', 'worker', 'database']) keepOneOldLog(path.join(logs, `${name}.log`));
 
@@ -130,21 +133,14 @@ function welcome({ url, demonstration, development }) {
   say(lines.join('\n'));
 }
 
-let signalsSeen = 0;
-function interrupt(signal) {
-  signalsSeen += 1;
-  if (signalsSeen > 1) {
-    say('Already stopping; the database needs a moment to write everything to disk.');
-    return;
-  }
-  say(`\nStopping (${signal}) ...`);
+function interrupt(reason) {
+  say(`\nStopping (${reason}) ...`);
   interruption.abort();
   stopRunningSteps();
   // During the start, the step under way throws and the catch above stops the rest.
   if (running.some(({ name }) => name === 'web and worker')) void stopAll().then(() => process.exit());
 }
 
-let stopped;
 function stopAll() {
   stopped ??= (async () => {
     for (const { name, stop } of running.reverse()) {

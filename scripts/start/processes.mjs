@@ -175,8 +175,8 @@ function showLines(child, name) {
     stream.on('data', (chunk) => {
       const lines = (rest + chunk).split('\n');
       rest = lines.pop() ?? '';
-      for (const line of lines) say(`${name.padEnd(6)} | ${line}`);
+      for (const line of lines) say(`${name.padEnd(10)} | ${line}`);
     });
-    stream.on('end', () => rest && say(`${name.padEnd(6)} | ${rest}`));
+    stream.on('end', () => rest && say(`${name.padEnd(10)} | ${rest}`));
   }
 }

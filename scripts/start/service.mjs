@@ -17,7 +17,7 @@ export function startService({ root, home, logs, host, port, environment, develo
   const workerLog = path.join(logs, 'worker.log');
   const web = keepRunning({
     ...common,
-    name: 'web',
+    name: 'web server',
     parameters: [nextCommand(root), development ? 'dev' : 'start', '-p', String(port), '-H', host],
     logFile: webLog,
     recordFile: path.join(home, 'web.json'),
