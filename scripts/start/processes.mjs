@@ -21,17 +21,15 @@ export function runToEnd({ command, parameters, cwd, env = process.env, logFile 
   const log = logFile ? openSync(logFile, 'w', 0o600) : null;
   return new Promise((resolve, reject) => {
     const child = spawn(command, parameters, { cwd, env, detached: true, stdio: log === null ? ['ignore', 'inherit', 'inherit'] : ['ignore', log, log] });
+    // The child has its own copy by now.
+    if (log !== null) closeSync(log);
     runningSteps.add(child);
-    const end = () => {
-      runningSteps.delete(child);
-      if (log !== null) closeSync(log);
-    };
     child.once('error', (error) => {
-      end();
+      runningSteps.delete(child);
       reject(error);
     });
     child.once('close', (code, signal) => {
-      end();
+      runningSteps.delete(child);
       resolve({ code, signal });
     });
   });

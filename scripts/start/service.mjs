@@ -41,7 +41,7 @@ export function startService({ root, home, logs, host, port, environment, develo
 }
 
 /**
- * Waits until `GET /api/health` answers with success. Throws a Stop when web or worker cannot keep up, or nothing good was heard in time.
+ * Waits until `GET /api/health` answers `{ status: 'ok' }`, which it does once database and worker are there. Throws a Stop when web or worker cannot keep up, or nothing good was heard in time.
  * @param {ReturnType<typeof startService>} service
  * @param {{ host: string, port: number, limitMs?: number, signal?: AbortSignal }} options
  */
@@ -55,14 +55,25 @@ export async function waitUntilHealthy(service, { host, port, limitMs = 120_000,
     if (service.worker.unexpectedEnds > 1) throw new Stop('The worker ended while starting.', { logFile: service.workerLog });
     try {
       const response = await fetch(address, { signal: AbortSignal.timeout(10_000) });
-      if (response.ok) return;
-      lastAnswer = `${response.status} ${(await response.text()).slice(0, 500)}`;
+      const body = await response.text();
+      if (response.ok && saysOk(body)) return;
+      lastAnswer = `${response.status} ${body.slice(0, 500)}`;
     } catch (error) {
       lastAnswer = error.cause?.message ?? error.message;
     }
     await new Promise((resolve) => setTimeout(resolve, 250));
   }
   throw new Stop(`The service did not become healthy within ${Math.round(limitMs / 1000)} s. ${address} last said: ${lastAnswer}`, { logFile: service.webLog });
+}
+
+/** @param {string} body */
+export function saysOk(body) {
+  try {
+    return JSON.parse(body)?.status === 'ok';
+  } catch (error) {
+    if (error instanceof SyntaxError) return false;
+    throw error;
+  }
 }
 
 /**
