@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 
+import { type NextApiRequest, type NextApiResponse } from 'next';
 import NextAuth, { type NextAuthOptions } from 'next-auth';
 import CredentialsProvider from 'next-auth/providers/credentials';
 import { type NextRequest } from 'next/server';
@@ -9,7 +10,7 @@ import { actorOfClaims, cookiesAreSecure, sessionSeconds, type SessionClaims } f
 import { authenticate } from '@/lib/access/sign-in';
 import { problemResponse } from '@/lib/api/problem';
 import { environment } from '@/lib/environment';
-import { ExpectedError, tooLarge } from '@/lib/errors';
+import { ExpectedError, invalid, tooLarge } from '@/lib/errors';
 import { log } from '@/lib/log';
 
 const bodyLimit = 16 * 1024;
@@ -70,33 +71,92 @@ function options(request: NextRequest, fail: (error: unknown) => void): NextAuth
   };
 }
 
-/** Makes addresses of this service relative, so that whoever came under another of its names stays there. */
-function keepHost(response: Response): Response {
-  const location = response.headers.get('location');
-  if (location !== null && URL.canParse(location)) {
-    const address = new URL(location);
-    if (address.origin === new URL(environment().HEDDLE_URL).origin) response.headers.set('location', `${address.pathname}${address.search}`);
+/** The body's fields as next-auth wants them: from a form, or from JSON. */
+async function readFields(request: NextRequest): Promise<Record<string, unknown>> {
+  if (request.method !== 'POST') return {};
+  const text = await request.text();
+  if (text.length > bodyLimit) throw tooLarge('A sign-in fits into 16 kilobytes.');
+  if (!/json/i.test(request.headers.get('content-type') ?? '')) return Object.fromEntries(new URLSearchParams(text));
+  try {
+    const fields: unknown = text === '' ? {} : JSON.parse(text);
+    return typeof fields === 'object' && fields !== null ? (fields as Record<string, unknown>) : {};
+  } catch {
+    throw invalid('The body is not valid JSON.');
   }
-  return response;
 }
 
-/** next-auth's handler, with our limits on tries: 429 with Retry-After for scripts, a way back to the sign-in page for browsers. */
-export async function handleNextAuth(request: NextRequest, context: { params: Promise<{ nextauth: string[] }> }): Promise<Response> {
+/** Collects what next-auth writes, in the manner of an older kind of route, into a Response. */
+class CollectedResponse {
+  private code = 200;
+  private body: string | null = null;
+  private readonly kept = new Map<string, string | string[]>();
+
+  status(code: number) {
+    this.code = code;
+    return this;
+  }
+
+  getHeader(name: string) {
+    return this.kept.get(name);
+  }
+
+  setHeader(name: string, value: string | string[]) {
+    // Addresses of this service become relative, so that whoever came under another of its names stays there.
+    const own = new URL(environment().HEDDLE_URL).origin;
+    if (name === 'Location' && typeof value === 'string' && value.startsWith(`${own}/`)) value = value.slice(own.length);
+    this.kept.set(name, value);
+    return this;
+  }
+
+  json(value: unknown) {
+    this.setHeader('Content-Type', 'application/json');
+    this.body = JSON.stringify(value);
+  }
+
+  send(value: unknown) {
+    if (typeof value === 'string') this.body = value;
+    else if (value !== undefined && value !== null) this.json(value);
+  }
+
+  end() {
+    this.body = null;
+  }
+
+  toResponse(): Response {
+    const headers = new Headers({ 'Cache-Control': 'no-store' });
+    for (const [name, value] of this.kept) for (const one of [value].flat()) headers.append(name, one);
+    return new Response(this.body, { status: this.code, headers });
+  }
+}
+
+/**
+ * next-auth's handler, with our limits on tries: 429 with Retry-After for scripts, a way back to the sign-in page for browsers.
+ * It is given the request by hand rather than left to take it from the framework's scope, so that bodies are bounded before they
+ * are read and tests call it like any other route.
+ */
+export async function handleNextAuth(request: NextRequest, context: { params: Promise<{ nextauth?: string[] }> }): Promise<Response> {
   const requestId = randomUUID();
-  if (Number(request.headers.get('content-length') ?? 0) > bodyLimit) return problemResponse(tooLarge('A sign-in fits into 16 kilobytes.'), requestId);
-  const failure: { error?: unknown } = {};
-  let response: Response;
   try {
-    response = (await NextAuth(request as never, context as never, options(request, (error) => (failure.error = error)))) as Response;
+    if (Number(request.headers.get('content-length') ?? 0) > bodyLimit) throw tooLarge('A sign-in fits into 16 kilobytes.');
+    const { nextauth } = await context.params;
+    const response = new CollectedResponse();
+    const failure: { error?: unknown } = {};
+    const incoming = {
+      method: request.method,
+      headers: Object.fromEntries(request.headers),
+      cookies: Object.fromEntries(request.cookies.getAll().map(({ name, value }) => [name, value])),
+      query: { ...Object.fromEntries(request.nextUrl.searchParams), nextauth },
+      body: await readFields(request),
+    };
+    await NextAuth(incoming as unknown as NextApiRequest, response as unknown as NextApiResponse, options(request, (error) => (failure.error = error)));
+    if (failure.error !== undefined) throw failure.error;
+    return response.toResponse();
   } catch (error) {
-    failure.error = error;
-    response = new Response(null);
+    const expected = error instanceof ExpectedError ? error : null;
+    if (!expected) log().error({ requestId, error: error instanceof Error ? { message: error.message, stack: error.stack } : error }, 'unexpected error at sign-in');
+    if (expected?.status === 429 && request.headers.get('accept')?.includes('text/html')) {
+      return new Response(null, { status: 303, headers: { Location: `/sign-in?error=too-many&wait=${expected.headers['Retry-After']}` } });
+    }
+    return problemResponse(error, requestId);
   }
-  if (failure.error === undefined) return keepHost(response);
-  const expected = failure.error instanceof ExpectedError ? failure.error : null;
-  if (!expected) log().error({ requestId, error: failure.error instanceof Error ? { message: failure.error.message, stack: failure.error.stack } : failure.error }, 'unexpected error at sign-in');
-  if (expected?.status === 429 && request.headers.get('accept')?.includes('text/html')) {
-    return new Response(null, { status: 303, headers: { Location: `/sign-in?error=too-many&wait=${expected.headers['Retry-After']}` } });
-  }
-  return problemResponse(failure.error, requestId);
 }
