@@ -10,6 +10,7 @@ import { explain, say, Stop, surviveClosedOutput } from './start/messages.mjs';
 import { installPackages } from './start/packages.mjs';
 import { greets, portState } from './start/ports.mjs';
 import { runToEnd, stopLeftBehind, stopRunningSteps } from './start/processes.mjs';
+import { requireMariadb } from './start/programs.mjs';
 import { startService, waitUntilHealthy } from './start/service.mjs';
 import { keptSecret, prepareHome, readStartSettings, serviceEnvironment } from './start/settings.mjs';
 import { whenAskedToStop } from './start/signals.mjs';
@@ -48,6 +49,8 @@ async function start() {
   await requireFreePort(settings);
   for (const name of ['web', 'worker', 'database']) keepOneOldLog(path.join(logs, `${name}.log`));
 
+  // What is missing is said before packages take their minutes.
+  if (!settings.databaseUrl) requireMariadb();
   await unlessInterrupted(() => installPackages(root, { development: false, logFile: path.join(logs, 'packages.log') }));
   const databaseUrl = await unlessInterrupted(() => provideDatabase(settings, { home, logs }));
   const environment = serviceEnvironment(

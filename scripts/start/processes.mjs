@@ -30,6 +30,8 @@ export function runToEnd({ command, parameters, cwd, env = process.env, logFile 
     });
     child.once('close', (code, signal) => {
       runningSteps.delete(child);
+      // A step that was killed leaves what it had started behind.
+      if (child.pid) signalGroup(child.pid, 'SIGKILL');
       resolve({ code, signal });
     });
   });

@@ -73,10 +73,11 @@ export function requireChromium() {
 function requireProgram(title, debianPackage, find) {
   const found = find();
   if (found) return found;
-  const install = `apt-get install -y --no-install-recommends ${debianPackage}`;
   const apt = findProgram(['apt-get']);
-  if (!apt) throw new Stop(`${title} is missing on this machine. Install it (on Debian: ${install}) and start again.`);
-  if (process.getuid?.() !== 0) throw new Stop(`${title} is missing on this machine. Install it with this one command and start again:\n  sudo ${install}`);
+  if (!apt) throw new Stop(`${title} is missing on this machine. Install it (on Debian, the package ${debianPackage}) and start again.`);
+  if (process.getuid?.() !== 0) {
+    throw new Stop(`${title} is missing on this machine. Install it with this one command and start again:\n  sudo sh -c 'apt-get update && apt-get install -y --no-install-recommends ${debianPackage}'`);
+  }
   say(`Installing ${title} (${debianPackage}) ...`);
   runApt(apt, ['update']);
   runApt(apt, ['install', '-y', '--no-install-recommends', debianPackage]);
