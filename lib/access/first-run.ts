@@ -1,3 +1,5 @@
+import { QueryTypes } from 'sequelize';
+
 import { recordAudit } from '@/lib/access/audit';
 import { assertPassword, hashPassword } from '@/lib/access/passwords';
 import { type SessionClaims } from '@/lib/access/session';
@@ -21,7 +23,7 @@ export async function createFirstAdministrator(person: { email: string; name: st
   const passwordHash = await hashPassword(person.password);
   const claims = await database().transaction(async (transaction) => {
     await database().query("INSERT IGNORE INTO locks (name) VALUES ('first-run')", { transaction });
-    await database().query("SELECT name FROM locks WHERE name = 'first-run' FOR UPDATE", { transaction });
+    await database().query("SELECT name FROM locks WHERE name = 'first-run' FOR UPDATE", { type: QueryTypes.SELECT, transaction });
     if (await User.findOne({ attributes: ['id'], transaction })) throw new ExpectedError(410, 'gone', 'No longer valid', 'This service has its administrator already. Sign in, or ask for an invitation.');
     const user = await User.create({ email: person.email, name: person.name, role: 'administrator', passwordHash, lastSignInAt: new Date() }, { transaction });
     return { userId: user.id, sessionVersion: user.sessionVersion };
