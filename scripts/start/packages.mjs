@@ -38,7 +38,17 @@ export async function installPackages(root, { development, logFile }) {
   if (!npm) throw new Stop('npm is missing on this machine; it comes with Node.js 20.');
   say(`Installing packages (${reason}) ...`);
   const end = await runToEnd({ command: npm, parameters: ['ci', '--include=dev', '--no-audit', '--no-fund'], cwd: root, logFile, env: { ...process.env, NODE_ENV: 'development' } });
-  if (end.code !== 0) throw new Stop('`npm ci` failed; its output stands above.', { logFile });
+  if (end.code !== 0) throw new Stop(`${reasonInLog(readFileSync(logFile, 'utf8'))}\n\`npm ci\` failed; all of its output: ${logFile}`);
+}
+
+/**
+ * What npm says is wrong. It begins with its first error line; the last lines are its manual.
+ * @param {string} log
+ */
+export function reasonInLog(log) {
+  const lines = log.trimEnd().split('\n');
+  const first = lines.findIndex((line) => /^npm (error|ERR!)/.test(line));
+  return (first < 0 ? lines.slice(-15) : lines.slice(first, first + 15)).join('\n');
 }
 
 function reasonToInstall(root, development) {

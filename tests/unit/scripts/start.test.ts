@@ -12,7 +12,7 @@ import { defaultPoolBytes, serverParameters, statementsAtStart } from '@/scripts
 import { identify, readRecord, runs, startInStat, writeRecord } from '@/scripts/start/identity.mjs';
 import { takeLock } from '@/scripts/start/lock.mjs';
 import { lastLines, Stop } from '@/scripts/start/messages.mjs';
-import { packagesOutOfStep } from '@/scripts/start/packages.mjs';
+import { packagesOutOfStep, reasonInLog } from '@/scripts/start/packages.mjs';
 import { freePort, greets, isGreeting, portState } from '@/scripts/start/ports.mjs';
 import { keepRunning, runToEnd, secondsBeforeRestart, stopLeftBehind } from '@/scripts/start/processes.mjs';
 import { findProgram } from '@/scripts/start/programs.mjs';
@@ -233,6 +233,12 @@ describe('what must be done again', () => {
     expect(packagesOutOfStep(locked, { 'node_modules/a': { version: '1.0.0', integrity: 'x' } }, { development: true })).toEqual(['b']);
     expect(packagesOutOfStep(locked, { ...locked, 'node_modules/a': { version: '1.0.0', integrity: 'z' } }, { development: true })).toEqual(['a']);
     expect(packagesOutOfStep(locked, { ...locked, 'node_modules/a': { version: '1.0.1', integrity: 'x' } }, { development: true })).toEqual(['a']);
+  });
+
+  it('shows what npm found wrong rather than the manual that follows it', () => {
+    const manual = Array.from({ length: 60 }, () => 'npm error [--install-links]').join('\n');
+    expect(reasonInLog(`npm warn old\nnpm error code EUSAGE\nnpm error Missing: a@1\n${manual}\n`)).toMatch(/^npm error code EUSAGE\nnpm error Missing: a@1\n/);
+    expect(reasonInLog('killed\n')).toBe('killed');
   });
 
   it('does not miss packages for other systems, nor those of tests where they are not needed', () => {
