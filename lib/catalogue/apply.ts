@@ -1,11 +1,11 @@
 import { type Transaction } from 'sequelize';
 
-import { rebuildCitations } from '@/lib/catalogue/citations';
+import { gatherCounted, rebuildCitations } from '@/lib/catalogue/citations';
 import { keyHash } from '@/lib/catalogue/key-hash';
 import { lockCatalogue } from '@/lib/catalogue/lock';
 import { planGroups, type Plan } from '@/lib/catalogue/plan';
 import { resolveTouchedVariants } from '@/lib/catalogue/variants';
-import { writeWorks } from '@/lib/catalogue/works';
+import { settleCitedOnly, writeWorks } from '@/lib/catalogue/works';
 import { insertRows, run, select, selectIn, type Cell } from '@/lib/db/bulk';
 
 export type CatalogueProgress = (stage: string, done: number, total: number) => Promise<void>;
@@ -107,8 +107,11 @@ export async function changeCatalogue(transaction: Transaction, change: Catalogu
   const ids = await placeGroups(transaction, plan);
   const citing = await writeWorks(transaction, plan, ids, progress);
   await placeRecords(transaction, plan, ids, citing);
-  await resolveTouchedVariants(transaction, progress);
+  const unsettled = await resolveTouchedVariants(transaction, progress);
   await progress('citations', 0, 1);
+  // Before anything goes: a work that goes takes its citations along, and with them the knowledge of whom to count anew.
+  await gatherCounted(transaction);
+  await settleCitedOnly(transaction, unsettled);
   await rebuildCitations(transaction);
   await placeInPortfolios(transaction);
   const [{ works }] = await select<{ works: number }>(transaction, 'SELECT COUNT(*) AS works FROM touched_works');

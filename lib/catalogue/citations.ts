@@ -8,19 +8,23 @@ const pairs = `
   JOIN cited_references reference ON reference.recordId = record.id
   JOIN reference_variants variant ON variant.hash = reference.variantHash`;
 
+async function gather(transaction: Transaction): Promise<void> {
+  await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citedWorkId FROM touched_works touched JOIN citations citation ON citation.citingWorkId = touched.id');
+  await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citingWorkId FROM moved_targets moved JOIN citations citation ON citation.citedWorkId = moved.id');
+}
+
+/** Remembers, in the temporary table counted_works, whose numbers of citations may change. */
+export async function gatherCounted(transaction: Transaction): Promise<void> {
+  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS counted_works');
+  await run(transaction, 'CREATE TEMPORARY TABLE counted_works (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB');
+  await gather(transaction);
+}
+
 /**
  * Derives the citation rows again: all of the touched works' own, and all that lead to a work that gained or lost a variant.
  * A work that cites itself is a fault of linking and gives no citation.
  */
 export async function rebuildCitations(transaction: Transaction): Promise<void> {
-  // Whoever is cited less after this must be counted anew as well.
-  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS counted_works');
-  await run(transaction, 'CREATE TEMPORARY TABLE counted_works (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB');
-  const count = async () => {
-    await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citedWorkId FROM touched_works touched JOIN citations citation ON citation.citingWorkId = touched.id');
-    await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citingWorkId FROM moved_targets moved JOIN citations citation ON citation.citedWorkId = moved.id');
-  };
-  await count();
   await run(transaction, 'DELETE citation FROM citations citation JOIN touched_works touched ON touched.id = citation.citingWorkId');
   await run(transaction, 'DELETE citation FROM citations citation JOIN moved_targets moved ON moved.id = citation.citedWorkId');
   await run(
@@ -38,7 +42,7 @@ export async function rebuildCitations(transaction: Transaction): Promise<void> 
      JOIN import_records record ON record.id = reference.recordId AND record.citing = 1
      WHERE variant.workId <> record.workId GROUP BY record.workId, variant.workId`,
   );
-  await count();
+  await gather(transaction);
   await run(transaction, 'INSERT IGNORE INTO counted_works SELECT id FROM touched_works');
   await run(transaction, 'INSERT IGNORE INTO counted_works SELECT id FROM moved_targets');
   await run(

@@ -1,7 +1,7 @@
 import { type Transaction } from 'sequelize';
 
 import { type CatalogueProgress } from '@/lib/catalogue/apply';
-import { settleCitedOnly, temporaryIds } from '@/lib/catalogue/works';
+import { temporaryIds } from '@/lib/catalogue/works';
 import { insertRows, run, select, selectIn, type Cell } from '@/lib/db/bulk';
 import { resolveVariants, type CataloguedTarget, type VariantInput } from '@/lib/linking/resolve';
 
@@ -80,8 +80,10 @@ async function citedOnlyWorks(transaction: Transaction, keys: Set<string>): Prom
 /**
  * Links the references of all touched records, and all others that the change may have led elsewhere.
  * Leaves behind the temporary table moved_targets: works whose citing works may have changed although no record of theirs was touched.
+ *
+ * @returns ids of the works that may have become cited-only, or may be left with nothing to stand on
  */
-export async function resolveTouchedVariants(transaction: Transaction, progress: CatalogueProgress): Promise<void> {
+export async function resolveTouchedVariants(transaction: Transaction, progress: CatalogueProgress): Promise<number[]> {
   await progress('linking', 0, 3);
   await touchVariants(transaction);
   const rows = await select<VariantRow>(
@@ -135,5 +137,5 @@ export async function resolveTouchedVariants(transaction: Transaction, progress:
   await run(transaction, 'CREATE TEMPORARY TABLE moved_targets (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB');
   await insertRows(transaction, 'INSERT IGNORE INTO moved_targets (id)', [...moved].map((id) => [id]));
   for (const id of await temporaryIds(transaction, 'touched_works')) settle.add(id);
-  await settleCitedOnly(transaction, [...settle].sort((a, b) => a - b));
+  return [...settle].sort((a, b) => a - b);
 }
