@@ -96,7 +96,7 @@ export function keepRunning({ name, command, parameters, cwd, env, logFile, reco
       unexpectedEnds += 1;
       failuresInARow = Date.now() - startedAt > steadyMs ? 1 : failuresInARow + 1;
       const seconds = secondsBeforeRestart(failuresInARow);
-      if (speaking) say(`The ${name} ended unexpectedly (${how}); starting it again in ${seconds} s. Its log: ${logFile}`);
+      if (speaking) say(`The ${name} ended unexpectedly (${how}); starting it again in ${seconds} s.${echo ? '' : ` Its log: ${logFile}`}`);
       timer = setTimeout(launch, seconds * 1000);
     };
     child.once('error', (error) => onEnd(error.message));
