@@ -44,6 +44,12 @@ interface RouteDefinition<Params, Query, Body, Row> {
 
 type Handler = (request: NextRequest, context: { params: Promise<Record<string, string | string[] | undefined>> }) => Promise<Response>;
 
+/** What a route handler tells of itself: the action that it is for, and the schemas from which the OpenAPI document is made. */
+export interface DescribedRoute {
+  heddleRoute: Action;
+  description: { params?: z.ZodType; query?: z.ZodType; body?: z.ZodType; status: number };
+}
+
 const safeMethods = new Set(['GET', 'HEAD', 'OPTIONS']);
 const bodyLimit = 1024 * 1024;
 
@@ -84,7 +90,7 @@ function queryOf(request: NextRequest): Record<string, string | string[]> {
  */
 export function route<Params = undefined, Query = undefined, Body = undefined, Row = undefined>(
   definition: RouteDefinition<Params, Query, Body, Row>,
-): Handler & { heddleRoute: Action } {
+): Handler & DescribedRoute {
   const handler: Handler = async (request, routeContext) => {
     const requestId = randomUUID();
     try {
@@ -122,5 +128,6 @@ export function route<Params = undefined, Query = undefined, Body = undefined, R
       return problemResponse(error, requestId);
     }
   };
-  return Object.assign(handler, { heddleRoute: definition.action });
+  const { action, params, query, body, status } = definition;
+  return Object.assign(handler, { heddleRoute: action, description: { params, query, body, status: status ?? 200 } });
 }
