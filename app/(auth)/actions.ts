@@ -5,6 +5,8 @@ import { z } from 'zod';
 
 import { requestPasswordReset, resetPassword } from '@/lib/access/accounts';
 import { action } from '@/lib/access/action';
+import { optionalActor } from '@/lib/access/actor';
+import { recordAudit } from '@/lib/access/audit';
 import { emailField, personNameField } from '@/lib/access/email';
 import { createFirstAdministrator } from '@/lib/access/first-run';
 import { acceptInvitation } from '@/lib/access/invitations';
@@ -28,7 +30,9 @@ export const signIn = action(null, z.object({ email: z.string().min(1, 'Give you
   redirect(localPath(input.next));
 });
 
-export const signOut = action(null, z.object({}), async () => {
+export const signOut = action(null, z.object({}), async ({ headers }) => {
+  const actor = await optionalActor();
+  if (actor) await recordAudit(actor, { headers }, { action: 'session.ended' });
   await endSession();
   redirect('/sign-in');
 });

@@ -1,5 +1,5 @@
 import { cookies, headers } from 'next/headers';
-import { redirect } from 'next/navigation';
+import { notFound, redirect } from 'next/navigation';
 import { type NextRequest } from 'next/server';
 import { cache } from 'react';
 
@@ -38,6 +38,13 @@ export async function actorForPage(): Promise<Actor> {
   if (actor) return actor;
   const here = localPath((await headers()).get(pathHeader));
   redirect(`/sign-in?next=${encodeURIComponent(here)}`);
+}
+
+/** The signed-in person of a page that only some roles have; for the others it does not exist. */
+export async function actorForPageOf(action: Action): Promise<Actor> {
+  const actor = await actorForPage();
+  if (!roleMay(actor.role, action)) notFound();
+  return actor;
 }
 
 /** Stops with 403 when the person's role does not allow the action at all. Grants on a portfolio are checked where the row is loaded. */

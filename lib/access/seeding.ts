@@ -30,3 +30,10 @@ export async function createDemonstrationAccounts(): Promise<Record<Role, number
   }
   return ids as Record<Role, number>;
 }
+
+/** What the sign-in page tells visitors of a demonstration; null where there is none. */
+export async function demonstrationHint(): Promise<{ emails: string[]; password: string } | null> {
+  if (environment().HEDDLE_DEMO !== 'on') return null;
+  const users = await User.findAll({ where: { email: demonstrationAccounts.map((account) => account.email), demonstration: true, disabledAt: null }, attributes: ['email'], order: [['id', 'ASC']] });
+  return users.length === 0 ? null : { emails: users.map((user) => user.email), password: demonstrationPassword };
+}
