@@ -32,6 +32,11 @@ function mailServer(): Transporter | null {
   return transport;
 }
 
+/** Whether messages leave the service by themselves. */
+export function hasMailServer(): boolean {
+  return environment().SMTP_URL !== undefined;
+}
+
 async function deliver(server: Transporter, mailId: number, mail: Mail): Promise<void> {
   try {
     await server.sendMail({ to: { name: '', address: mail.to }, subject: mail.subject, text: mail.text });

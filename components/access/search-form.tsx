@@ -1,0 +1,25 @@
+import Form from 'next/form';
+import { useId } from 'react';
+
+/** A search whose words stand in the address. */
+export function SearchForm({ label, q, hint }: { label: string; q: string | undefined; hint?: string }) {
+  const id = useId();
+  return (
+    <Form action="" role="search" className="grid max-w-md gap-1">
+      <label htmlFor={id} className="text-[13px] font-semibold">
+        {label}
+      </label>
+      <div className="flex gap-2">
+        <input id={id} key={q} name="q" type="search" defaultValue={q} maxLength={300} aria-describedby={hint ? `${id}-hint` : undefined} className="min-w-0 flex-1 rounded-sm border border-thread-strong bg-paper px-3 py-1.5" />
+        <button type="submit" className="rounded-sm border border-indigo bg-paper px-4 py-1.5 font-semibold text-indigo">
+          Search
+        </button>
+      </div>
+      {hint && (
+        <p id={`${id}-hint`} className="text-[13px] text-ink-soft">
+          {hint}
+        </p>
+      )}
+    </Form>
+  );
+}
