@@ -1,5 +1,5 @@
 /** Keeps the layout still while a page is on its way. */
-export default function WorkspaceLoading() {
+export function PageLoading() {
   return (
     <div className="grid gap-4 px-4 py-6 sm:px-7" aria-busy="true">
       <p role="status" className="sr-only">
