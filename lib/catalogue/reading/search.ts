@@ -38,6 +38,7 @@ async function findWorks(actor: Actor, q: string): Promise<WorkListItem[]> {
 
 /** What the header's search offers: portfolios by name, works by their words or by DOI; only what the person may see. */
 export async function search(actor: Actor, q: string): Promise<SearchResult> {
+  if (q === '') return { portfolios: [], works: [] };
   const [portfolios, works] = await Promise.all([findPortfolios(actor, q), findWorks(actor, q)]);
   return { portfolios, works };
 }
