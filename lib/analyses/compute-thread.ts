@@ -2,6 +2,7 @@
 import { createHash } from 'node:crypto';
 import { parentPort, workerData } from 'node:worker_threads';
 
+import { type ThreadData } from '@/lib/jobs/threads';
 import { analyseNetwork, serialiseInput, serialiseResult } from '@/lib/network/analysis';
 import { type AnalysisInput, type AnalysisParameters, type AnalysisResult } from '@/lib/network/types';
 
@@ -16,7 +17,7 @@ export type ComputeMessage =
 
 if (parentPort) {
   const port = parentPort;
-  const { input, parameters } = workerData as ComputeRequest;
+  const { input, parameters } = (workerData as ThreadData<ComputeRequest>).request;
   const sha256 = (bytes: Uint8Array) => createHash('sha256').update(bytes).digest('hex');
   let last = 0;
   let lastStage = '';

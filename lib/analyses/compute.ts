@@ -1,9 +1,9 @@
 import { once } from 'node:events';
-import { Worker } from 'node:worker_threads';
 
 import { type ComputeMessage, type ComputeRequest } from '@/lib/analyses/compute-thread';
 import { ExpectedError } from '@/lib/errors';
 import { type JobContext } from '@/lib/jobs/context';
+import { startThread } from '@/lib/jobs/threads';
 
 export type Computed = Extract<ComputeMessage, { kind: 'done' }>;
 
@@ -12,7 +12,7 @@ const threadMegabytes = 8_192;
 
 /** Computes in a thread of its own, so that heartbeats go on, and ends the thread when the job is cancelled. */
 export async function compute(request: ComputeRequest, context: JobContext): Promise<Computed> {
-  const thread = new Worker(new URL('./compute-thread.ts', import.meta.url), { workerData: request, execArgv: ['--import', 'tsx'], resourceLimits: { maxOldGenerationSizeMb: threadMegabytes } });
+  const thread = startThread(new URL('./compute-thread.ts', import.meta.url), request, threadMegabytes);
   const stop = () => void thread.terminate();
   context.signal.addEventListener('abort', stop);
   let done: Computed | null = null;

@@ -9,6 +9,7 @@ import { detectFormat } from '@/lib/bibliography/detect';
 import { createReader } from '@/lib/bibliography/readers';
 import { type Format } from '@/lib/bibliography/record';
 import { BatchBuilder, type Batch } from '@/lib/imports/rows';
+import { type ThreadData } from '@/lib/jobs/threads';
 import { storage } from '@/lib/services/storage';
 
 export interface ReadRequest {
@@ -16,8 +17,6 @@ export interface ReadRequest {
   /** Chosen by a person; null to detect it. */
   format: Format | null;
   encoding: string | null;
-  /** Entries up to and including this position are stored already. */
-  after: number;
 }
 
 export type ThreadMessage =
@@ -49,7 +48,7 @@ async function decideEncoding(request: ReadRequest): Promise<{ encoding: string;
 async function readFile(request: ReadRequest, send: (message: ThreadMessage) => void, room: () => Promise<void>): Promise<void> {
   const { encoding, fellBack } = await decideEncoding(request);
   const builder = new BatchBuilder();
-  if (fellBack && request.after < 0) {
+  if (fellBack) {
     builder.addProblem({ severity: 'warning', code: 'encoding-guessed', message: 'The file is not valid UTF-8; it was read as windows-1252 (Western European). If accents look wrong, choose another encoding and read it again.', line: 1 }, null);
   }
   const decoder = createDecoder(encoding);
@@ -62,7 +61,7 @@ async function readFile(request: ReadRequest, send: (message: ThreadMessage) => 
     if (!detected) throw new Refusal('The format was not recognised. Heddle reads BibTeX, RIS, CSL-JSON, tagged text exports with cited references, and DOI-registry JSON; choose the format and read the file again, or export it anew.');
     format = detected.format;
     reader = createReader(detected.format, {
-      onEntry: (entry) => entry.position > request.after && builder.addEntry(entry),
+      onEntry: (entry) => builder.addEntry(entry),
       onProblem: (problem) => builder.addProblem(problem, null),
     });
     reader.write(head);
@@ -107,7 +106,7 @@ if (parentPort) {
     port.postMessage(message);
   };
   try {
-    await readFile(workerData as ReadRequest, send, room);
+    await readFile((workerData as ThreadData<ReadRequest>).request, send, room);
     // Stay until every batch has been stored: an early end would look like a death.
     while (waiting > 0) await new Promise<void>((resolve) => (wake = resolve));
   } catch (error) {

@@ -1,5 +1,4 @@
 import { once } from 'node:events';
-import { Worker } from 'node:worker_threads';
 
 import { type Transaction } from 'sequelize';
 
@@ -9,6 +8,7 @@ import { ExpectedError } from '@/lib/errors';
 import { variantColumns, type Batch } from '@/lib/imports/rows';
 import { type ReadRequest, type ThreadMessage } from '@/lib/imports/read-thread';
 import { type JobContext } from '@/lib/jobs/context';
+import { startThread } from '@/lib/jobs/threads';
 import { type Import } from '@/models/import';
 
 /** Memory that the reading of one file may take; past it the thread ends, not the worker. */
@@ -47,15 +47,14 @@ async function writeBatch(transaction: Transaction, importId: number, batch: Bat
 }
 
 /**
- * Reads an import's file in a thread of its own and stores its records batch by batch. A reading that was broken off (a killed worker) is
- * taken up behind the last batch stored.
+ * Reads an import's file in a thread of its own and stores its records batch by batch.
  */
 export async function readImport(row: Import, context: JobContext): Promise<void> {
-  const [{ last }] = await select<{ last: number | null }>(null, 'SELECT MAX(position) AS last FROM import_records WHERE importId = ?', [row.id]);
-  const request: ReadRequest = { storageKey: row.storageKey, format: row.chosenFormat, encoding: row.encoding, after: last ?? -1 };
-  // Problems outside entries have no position by which to tell whether they were stored before.
-  if (last !== null) await run(null, 'DELETE FROM import_problems WHERE importId = ? AND (position IS NULL OR position > ?)', [row.id, last]);
-  const thread = new Worker(new URL('./read-thread.ts', import.meta.url), { workerData: request, execArgv: ['--import', 'tsx'], resourceLimits: { maxOldGenerationSizeMb: threadMegabytes } });
+  // A reading that was broken off (a killed worker) begins anew: entries that inherit come out of order, so there is no place to go on from.
+  await run(null, 'DELETE FROM import_records WHERE importId = ?', [row.id]);
+  await run(null, 'DELETE FROM import_problems WHERE importId = ?', [row.id]);
+  const request: ReadRequest = { storageKey: row.storageKey, format: row.chosenFormat, encoding: row.encoding };
+  const thread = startThread(new URL('./read-thread.ts', import.meta.url), request, threadMegabytes);
   const stop = () => void thread.terminate();
   context.signal.addEventListener('abort', stop);
   let silence = setTimeout(stop, silenceMs);
