@@ -25,7 +25,7 @@ export function ConfirmedAction({ action, fields, label, subject, question }: Co
   const hidden = Object.entries(fields).map(([name, value]) => <input key={name} type="hidden" name={name} value={value} />);
   const plain = 'rounded-sm px-1 py-0.5 text-indigo underline underline-offset-2';
   return (
-    <div className="grid gap-2">
+    <div className="grid gap-0.5">
       {question && asking !== 'open' ? (
         <div>
           <button type="button" className={plain} autoFocus={asking === 'kept'} onClick={() => setAsking('open')} aria-label={`${label}: ${subject}`}>

@@ -10,7 +10,7 @@ interface SimpleTableProps {
 /** A short table that the server draws whole; wide ones scroll within their own frame, by keyboard too. */
 export function SimpleTable({ caption, head, children }: SimpleTableProps) {
   return (
-    <div className="relative overflow-x-auto" tabIndex={0} role="region" aria-label={caption}>
+    <div className="relative overflow-x-auto" tabIndex={0} role="region" aria-label={`${caption}, table`}>
       <table className="w-full border-collapse text-[14.5px]">
         <caption className="sr-only">{caption}</caption>
         <thead>

@@ -13,7 +13,7 @@ export function RoleForm({ userId, name, role }: { userId: string; name: string;
   const [state, submit] = useActionState(changeRole, untouchedForm);
   const [chosen, setChosen] = useState<string>(role);
   return (
-    <form action={submit} className="grid gap-2">
+    <form action={submit}>
       <input type="hidden" name="id" value={userId} />
       <div className="flex gap-2">
         <select name="role" aria-label={`Role of ${name}`} value={chosen} onChange={(event) => setChosen(event.target.value)} className="rounded-sm border border-thread-strong bg-paper px-2 py-1">
