@@ -19,6 +19,7 @@ export const up: Migration = async ({ context: database }) => {
       progressDone BIGINT UNSIGNED NOT NULL DEFAULT 0,
       progressTotal BIGINT UNSIGNED NOT NULL DEFAULT 0,
       startedAt DATETIME(3) NULL,
+      checkedVersion BIGINT UNSIGNED NULL,
       counts JSON NULL,
       error TEXT NULL,
       acceptedAt DATETIME(3) NULL,

@@ -36,6 +36,7 @@ export class Import extends Model<InferAttributes<Import>, InferCreationAttribut
   declare progressDone: CreationOptional<number>;
   declare progressTotal: CreationOptional<number>;
   declare startedAt: CreationOptional<Date | null>;
+  declare checkedVersion: CreationOptional<number | null>;
   declare counts: CreationOptional<ImportCounts | null>;
   declare error: CreationOptional<string | null>;
   declare acceptedAt: CreationOptional<Date | null>;
@@ -64,6 +65,7 @@ Import.init(
     progressDone: { type: DataTypes.BIGINT.UNSIGNED, allowNull: false, defaultValue: 0 },
     progressTotal: { type: DataTypes.BIGINT.UNSIGNED, allowNull: false, defaultValue: 0 },
     startedAt: { type: DataTypes.DATE(3), allowNull: true },
+    checkedVersion: { type: DataTypes.BIGINT.UNSIGNED, allowNull: true },
     counts: { type: DataTypes.JSON, allowNull: true },
     error: { type: DataTypes.TEXT, allowNull: true },
     acceptedAt: { type: DataTypes.DATE(3), allowNull: true },

@@ -2,7 +2,7 @@ import { type Transaction } from 'sequelize';
 
 import { gatherCounted, rebuildCitations } from '@/lib/catalogue/citations';
 import { keyHash } from '@/lib/catalogue/key-hash';
-import { lockCatalogue } from '@/lib/catalogue/lock';
+import { lockCatalogue, raiseCatalogueVersion } from '@/lib/catalogue/lock';
 import { planGroups, type Plan } from '@/lib/catalogue/plan';
 import { resolveTouchedVariants } from '@/lib/catalogue/variants';
 import { settleCitedOnly, writeWorks } from '@/lib/catalogue/works';
@@ -96,6 +96,7 @@ async function placeInPortfolios(transaction: Transaction): Promise<void> {
  */
 export async function changeCatalogue(transaction: Transaction, change: CatalogueChange, progress: CatalogueProgress = noProgress): Promise<{ works: number }> {
   await lockCatalogue(transaction);
+  await raiseCatalogueVersion(transaction);
   let seed: { sql: string; values: unknown[] };
   if (change.kind === 'regroup') seed = { sql: 'id IN (?)', values: [change.recordIds] };
   else {

@@ -1,15 +1,14 @@
 import { type Transaction } from 'sequelize';
 
 import { type CatalogueProgress } from '@/lib/catalogue/apply';
-import { temporaryIds } from '@/lib/catalogue/works';
+import { createCitedOnly, temporaryIds, type VariantText } from '@/lib/catalogue/works';
 import { insertRows, run, select, selectIn, type Cell } from '@/lib/db/bulk';
 import { resolveVariants, type CataloguedTarget, type VariantInput } from '@/lib/linking/resolve';
 
 const hex = (buffer: Buffer | null): string | null => (buffer ? buffer.toString('hex') : null);
 
-interface VariantRow {
+interface VariantRow extends VariantText {
   hash: Buffer;
-  doi: string | null;
   identifierKey: Buffer | null;
   fieldKey: Buffer | null;
   titleKey: Buffer | null;
@@ -69,12 +68,22 @@ async function cataloguedTargets(transaction: Transaction): Promise<Map<string, 
   return new Map([...targets].map(([key, works]) => [key, [...works.values()]]));
 }
 
-/** Rows of cited-only works by key, made where they are missing. */
-async function citedOnlyWorks(transaction: Transaction, keys: Set<string>): Promise<Map<string, number>> {
-  const buffers = [...keys].sort().map((key) => Buffer.from(key, 'hex'));
-  await insertRows(transaction, 'INSERT IGNORE INTO works (workKey, catalogued)', buffers.map((key) => [key, 0]));
-  const rows = await selectIn<{ id: number; workKey: Buffer }, Buffer>(transaction, 'SELECT id, workKey FROM works WHERE workKey IN (?)', buffers);
-  return new Map(rows.map((row) => [row.workKey.toString('hex'), row.id]));
+/**
+ * Rows of cited-only works by key. Missing ones are made, whole: a work that was not there has no other variants than these.
+ * Existing ones are for the caller to settle.
+ */
+async function citedOnlyWorks(transaction: Transaction, drawn: Map<string, VariantText[]>): Promise<{ ids: Map<string, number>; existing: number[] }> {
+  const find = async (keys: string[]) => {
+    const rows = await selectIn<{ id: number; workKey: Buffer }, Buffer>(transaction, 'SELECT id, workKey FROM works WHERE workKey IN (?)', keys.map((key) => Buffer.from(key, 'hex')));
+    return rows.map((row) => [row.workKey.toString('hex'), row.id] as const);
+  };
+  const keys = [...drawn.keys()].sort();
+  const ids = new Map(await find(keys));
+  const existing = [...ids.values()];
+  const missing = keys.filter((key) => !ids.has(key));
+  await createCitedOnly(transaction, missing.map((key) => ({ workKey: Buffer.from(key, 'hex'), variants: drawn.get(key) as VariantText[] })));
+  for (const [key, id] of await find(missing)) ids.set(key, id);
+  return { ids, existing };
 }
 
 /**
@@ -88,7 +97,8 @@ export async function resolveTouchedVariants(transaction: Transaction, progress:
   await touchVariants(transaction);
   const rows = await select<VariantRow>(
     transaction,
-    `SELECT variant.hash, variant.doi, variant.identifierKey, variant.fieldKey, variant.titleKey, variant.ownKey, variant.workId, variant.how
+    `SELECT variant.hash, variant.doi, variant.identifierKey, variant.fieldKey, variant.titleKey, variant.ownKey, variant.workId, variant.how,
+       variant.pmid, variant.author, variant.family, variant.year, variant.title, variant.source, variant.volume, variant.issue, variant.page, variant.raw, variant.standing
      FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.standing > 0`,
   );
   const catalogue = await cataloguedTargets(transaction);
@@ -102,13 +112,19 @@ export async function resolveTouchedVariants(transaction: Transaction, progress:
     ownKey: row.ownKey.toString('hex'),
   }));
   const resolutions = resolveVariants(inputs, (key) => catalogue.get(key) ?? []);
-  const drawn = new Set<string>();
-  for (const resolution of resolutions.values()) if ('citedOnlyKey' in resolution) drawn.add(resolution.citedOnlyKey);
-  const drawnIds = await citedOnlyWorks(transaction, drawn);
+  const drawn = new Map<string, VariantText[]>();
+  rows.forEach((row, index) => {
+    const resolution = resolutions.get(inputs[index].id);
+    if (!resolution || !('citedOnlyKey' in resolution)) return;
+    const variants = drawn.get(resolution.citedOnlyKey);
+    if (variants) variants.push(row);
+    else drawn.set(resolution.citedOnlyKey, [row]);
+  });
+  const { ids: drawnIds, existing } = await citedOnlyWorks(transaction, drawn);
 
   const moves: Cell[][] = [];
   const moved = new Set<number>();
-  const settle = new Set<number>(drawnIds.values());
+  const settle = new Set<number>(existing);
   rows.forEach((row, index) => {
     const resolution = resolutions.get(inputs[index].id) as NonNullable<ReturnType<typeof resolutions.get>>;
     const workId = 'workId' in resolution ? resolution.workId : (drawnIds.get(resolution.citedOnlyKey) as number);

@@ -67,8 +67,8 @@ export async function writeWorks(transaction: Transaction, plan: Plan, ids: Map<
   return citing;
 }
 
-interface VariantText {
-  workId: number;
+/** What a variant shows of the work it cites. */
+export interface VariantText {
   doi: string | null;
   pmid: string | null;
   author: string | null;
@@ -92,9 +92,26 @@ function bestVariant(variants: VariantText[]): VariantText {
   });
 }
 
+/** The row of a cited-only work, from the fullest of its variants in use. */
+function citedOnlyRow(id: number | null, workKey: Buffer, variants: VariantText[]): Cell[] {
+  const best = bestVariant(variants);
+  // A work may be cited by DOI here and without there: the identifier is kept whichever variant is the fullest.
+  const doi = best.doi ?? variants.map((variant) => variant.doi).filter((value) => value !== null).sort()[0] ?? null;
+  const title = best.title ?? (best.author === null && best.source === null ? best.raw : null);
+  const authors = best.family ? [{ family: best.family }] : [];
+  return [
+    id, workKey, 0, 'other', title || null, title ? title.slice(0, 160).toLowerCase() : null, JSON.stringify(authors), best.author, best.family, best.year, best.source, best.volume, best.issue,
+    best.page, null, null, null, doi, JSON.stringify(doi ? { doi } : best.pmid ? { pmid: best.pmid } : {}), null, '[]', null, null, 0, 0, 0,
+  ];
+}
+
+/** Makes cited-only works that are not there yet. All variants that lead to them must be given. */
+export async function createCitedOnly(transaction: Transaction, works: readonly { workKey: Buffer; variants: VariantText[] }[]): Promise<void> {
+  await insertRows(transaction, `INSERT INTO works (${columns.join(', ')})`, works.map(({ workKey, variants }) => citedOnlyRow(null, workKey, variants)));
+}
+
 /**
- * Settles works on which no record stands: those still cited get their fields from the fullest variant in use, the others go.
- * `condition` limits the works looked at.
+ * Settles those of the given works on which no record stands: the ones still cited get their fields from the fullest variant in use, the others go.
  */
 export async function settleCitedOnly(transaction: Transaction, workIds: readonly number[]): Promise<void> {
   for (let from = 0; from < workIds.length; from += 5_000) {
@@ -104,7 +121,7 @@ export async function settleCitedOnly(transaction: Transaction, workIds: readonl
       'SELECT id, workKey FROM works WHERE id IN (?) AND NOT EXISTS (SELECT 1 FROM import_records record WHERE record.workId = works.id AND record.catalogued = 1)',
       slice,
     );
-    const variants = await selectIn<VariantText, number>(
+    const variants = await selectIn<VariantText & { workId: number }, number>(
       transaction,
       'SELECT workId, doi, pmid, author, family, year, title, source, volume, issue, page, raw, standing FROM reference_variants WHERE standing > 0 AND workId IN (?)',
       bare.map((work) => work.id),
@@ -123,15 +140,7 @@ export async function settleCitedOnly(transaction: Transaction, workIds: readonl
         gone.push(id);
         continue;
       }
-      const best = bestVariant(held);
-      // A work may be cited by DOI here and without there: the identifier is kept whichever variant is the fullest.
-      const doi = best.doi ?? held.map((variant) => variant.doi).filter((value) => value !== null).sort()[0] ?? null;
-      const title = best.title ?? (best.author === null && best.source === null ? best.raw : null);
-      const authors = best.family ? [{ family: best.family }] : [];
-      rows.push([
-        id, workKey, 0, 'other', title || null, title ? title.slice(0, 160).toLowerCase() : null, JSON.stringify(authors), best.author, best.family, best.year, best.source, best.volume, best.issue,
-        best.page, null, null, null, doi, JSON.stringify(doi ? { doi } : best.pmid ? { pmid: best.pmid } : {}), null, '[]', null, null, 0, 0, 0,
-      ]);
+      rows.push(citedOnlyRow(id, workKey, held));
     }
     await insertRows(transaction, `INSERT INTO works (${columns.join(', ')})`, rows, update);
     for (let at = 0; at < gone.length; at += 2_000) await run(transaction, 'DELETE FROM works WHERE id IN (?)', [gone.slice(at, at + 2_000)]);

@@ -1,5 +1,5 @@
 import { changeCatalogue } from '@/lib/catalogue/apply';
-import { lockCatalogue } from '@/lib/catalogue/lock';
+import { catalogueVersion, lockCatalogue } from '@/lib/catalogue/lock';
 import { database } from '@/lib/db/connection';
 import { run } from '@/lib/db/bulk';
 import { checkImport, countImport } from '@/lib/imports/check';
@@ -29,9 +29,10 @@ export const importReadJob: JobHandler = {
     await moveImport(row.id, ['reading', 'checking'], 'checking');
     await context.progress('checking', 0, 1);
     await database().transaction(async (transaction) => {
+      const checkedVersion = await catalogueVersion(transaction);
       await checkImport(transaction, row.id);
       const counts = await countImport(transaction, row.id);
-      await moveImport(row.id, ['checking'], row.autoAccept ? 'accepting' : 'review', { counts }, transaction);
+      await moveImport(row.id, ['checking'], row.autoAccept ? 'accepting' : 'review', { counts, checkedVersion }, transaction);
       if (row.autoAccept) await enqueue('import.accept', { importId: row.id, userId: row.uploadedById }, { portfolioId: row.portfolioId, createdById: row.uploadedById, transaction });
     });
   },
@@ -40,7 +41,7 @@ export const importReadJob: JobHandler = {
   },
 };
 
-/** Catalogues the records. Checked again first, under the catalogue's lock: another import may have been accepted since. */
+/** Catalogues the records. Checked again first, under the catalogue's lock, when another change has come between. */
 export const importAcceptJob: JobHandler = {
   progress: copyProgress,
   async run(context) {
@@ -48,8 +49,7 @@ export const importAcceptJob: JobHandler = {
     const row = await Import.findByPk(importId);
     if (!row || row.state !== 'accepting') return;
     await database().transaction(async (transaction) => {
-      await lockCatalogue(transaction);
-      await checkImport(transaction, importId);
+      if ((await lockCatalogue(transaction)) !== row.checkedVersion) await checkImport(transaction, importId);
       await changeCatalogue(transaction, { kind: 'accept', importId }, context.progress);
       const counts = await countImport(transaction, importId);
       await moveImport(importId, ['accepting'], 'accepted', { counts, acceptedAt: new Date(), acceptedById: (context.job.payload as JobPayloads['import.accept']).userId, undoneAt: null }, transaction);

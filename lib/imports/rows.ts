@@ -50,10 +50,11 @@ function variantRow(reference: CitedReference): { hash: Buffer; row: VariantRow 
   return { hash, row: [hash, doi, pmid, hashed(keys.identifierKey), hashed(keys.fieldKey), hashed(keys.titleKey), keyHash(keys.ownKey), author, family, year, title, source, volume, issue, page, raw] };
 }
 
-/** Collects rows until somebody takes them; remembers the variants already sent, so that one file sends each once. */
+/** Collects rows until somebody takes them; remembers the references already met, so that one file works each out once. */
 export class BatchBuilder {
   private batch: Batch = { records: [], variants: [], problems: [], bytes: 0 };
-  private readonly sent = new Set<string>();
+  /** Hash by the reference as it stood: most references of a file stand in it more than once. */
+  private readonly known = new Map<string, Buffer>();
   private weight = 0;
 
   addEntry(entry: Entry): void {
@@ -66,13 +67,14 @@ export class BatchBuilder {
     const { references, ...fields } = entry.fields;
     const keys = recordKeys(entry.fields);
     const rows: RecordRow['references'] = references.map((reference) => {
-      const { hash, row } = variantRow(reference);
-      const name = hash.toString('latin1');
-      if (!this.sent.has(name)) {
+      let hash = this.known.get(reference.raw);
+      if (!hash) {
+        const variant = variantRow(reference);
+        hash = variant.hash;
         // Bounded: forgetting only costs a row that the database ignores.
-        if (this.sent.size > 500_000) this.sent.clear();
-        this.sent.add(name);
-        this.batch.variants.push(row);
+        if (this.known.size > 500_000) this.known.clear();
+        this.known.set(reference.raw, hash);
+        this.batch.variants.push(variant.row);
       }
       return { line: reference.line, raw: reference.raw.slice(0, 4000), variant: hash };
     });
