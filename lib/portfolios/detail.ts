@@ -1,24 +1,15 @@
 import { listGrants } from '@/lib/access/grants';
 import { may, type Actor } from '@/lib/access/permissions';
 import { type PortfolioDetail } from '@/lib/api/types';
-import { measureCoverage } from '@/lib/analyses/input';
+import { asItStands } from '@/lib/catalogue/reading/as-it-stands';
 import { standingMember } from '@/lib/catalogue/reading/work-items';
 import { select } from '@/lib/db/bulk';
 import { notFound } from '@/lib/errors';
 import { listMatches } from '@/lib/matches/matches';
+import { readCoverage } from '@/lib/portfolios/coverage';
 import { latestAnalysis } from '@/lib/portfolios/latest-analysis';
 import { presentPortfolios } from '@/lib/portfolios/present';
 import { type Portfolio } from '@/models/portfolio';
-
-async function countCitedOnly(portfolioId: number): Promise<number> {
-  const [{ works }] = await select<{ works: number }>(
-    null,
-    `SELECT COUNT(DISTINCT citation.citedWorkId) AS works FROM portfolio_works membership JOIN citations citation ON citation.citingWorkId = membership.workId
-     JOIN works work ON work.id = citation.citedWorkId AND work.catalogued = 0 WHERE ${standingMember}`,
-    { portfolioId },
-  );
-  return Number(works);
-}
 
 async function countYears(portfolioId: number): Promise<PortfolioDetail['years']> {
   const rows = await select<{ year: number; works: number }>(
@@ -42,20 +33,14 @@ async function countImports(portfolioId: number): Promise<PortfolioDetail['impor
 
 /** Everything that the overview of a portfolio shows. Coverage is counted as analyses count it, on the portfolio as it stands now. */
 export async function readPortfolio(actor: Actor, row: Portfolio): Promise<PortfolioDetail> {
-  const [[view], coverage, citedOnlyWorks, years, imports, openMatches, analysis] = await Promise.all([
-    presentPortfolios(actor, [row]), measureCoverage(row.id), countCitedOnly(row.id), countYears(row.id), countImports(row.id),
+  const [[view], coverage, years, imports, openMatches, analysis] = await Promise.all([
+    presentPortfolios(actor, [row]), readCoverage(row.id), asItStands(row.id, 'years', () => countYears(row.id)), countImports(row.id),
     listMatches(actor, row.id, { page: 1, pageSize: 1, state: 'open' }), latestAnalysis(row.id),
   ]);
   if (!view) throw notFound();
   return {
     ...view,
-    coverage: {
-      cataloguedWorks: coverage.cataloguedWorks,
-      worksWithReferences: coverage.worksWithReferences,
-      references: coverage.references,
-      linkedReferences: coverage.linkedReferences,
-      citedOnlyWorks,
-    },
+    coverage,
     years,
     imports,
     openMatches: openMatches.total,

@@ -3,6 +3,7 @@ import { z } from 'zod';
 import { paging, sortBy, yearQuery, type Page } from '@/lib/api/schemas';
 import { type WorkListItem } from '@/lib/api/types';
 import { workTypes } from '@/lib/bibliography/record';
+import { asItStands } from '@/lib/catalogue/reading/as-it-stands';
 import { searchCondition } from '@/lib/catalogue/reading/search-words';
 import { presentWorks, standingMember } from '@/lib/catalogue/reading/work-items';
 import { select } from '@/lib/db/bulk';
@@ -19,26 +20,33 @@ export const worksQuery = z.object({
 });
 export type WorksQuery = z.output<typeof worksQuery>;
 
-const cited = `SELECT citation.citedWorkId FROM portfolio_works membership JOIN citations citation ON citation.citingWorkId = membership.workId WHERE ${standingMember}`;
+const citing = `portfolio_works membership JOIN citations citation ON citation.citingWorkId = membership.workId WHERE ${standingMember}`;
 
-/** The works that a list draws from, before its filters. */
+/** The works that a list draws from, before its filters, and how many members cite each. */
 const scopes = {
-  true: { from: 'portfolio_works membership JOIN works work ON work.id = membership.workId AND work.catalogued = 1', where: standingMember },
-  false: { from: `(SELECT DISTINCT ${cited.slice('SELECT '.length)}) linked JOIN works work ON work.id = linked.citedWorkId AND work.catalogued = 0`, where: '1 = 1' },
-  all: {
-    from: `(SELECT membership.workId FROM portfolio_works membership JOIN works own ON own.id = membership.workId AND own.catalogued = 1 WHERE ${standingMember} UNION ${cited}) linked JOIN works work ON work.id = linked.workId`,
+  true: {
+    from: 'portfolio_works membership JOIN works work ON work.id = membership.workId AND work.catalogued = 1',
+    where: standingMember,
+    // Counted work by work: members are cited far less often than they cite.
+    citationsHere: `(SELECT COUNT(*) FROM citations citation JOIN portfolio_works membership ON membership.workId = citation.citingWorkId AND ${standingMember} WHERE citation.citedWorkId = work.id)`,
+  },
+  false: {
+    from: `(SELECT citation.citedWorkId AS workId, COUNT(*) AS here FROM ${citing} GROUP BY citation.citedWorkId) linked JOIN works work ON work.id = linked.workId AND work.catalogued = 0`,
     where: '1 = 1',
+    citationsHere: 'linked.here',
+  },
+  all: {
+    from: `(SELECT workId, SUM(here) AS here FROM (
+        SELECT membership.workId, 0 AS here FROM portfolio_works membership JOIN works own ON own.id = membership.workId AND own.catalogued = 1 WHERE ${standingMember}
+        UNION ALL SELECT citation.citedWorkId, COUNT(*) FROM ${citing} GROUP BY citation.citedWorkId) listed GROUP BY workId) linked JOIN works work ON work.id = linked.workId`,
+    where: '1 = 1',
+    citationsHere: 'linked.here',
   },
 } as const;
 
 const searchScopes = { true: 'catalogued', false: 'cited-only', all: 'all' } as const;
 
-const sorts: Record<WorksQuery['sort']['field'], string> = {
-  year: 'work.year',
-  title: 'work.titleSort',
-  references: 'work.referenceCount',
-  citationsHere: `(SELECT COUNT(*) FROM citations citation JOIN portfolio_works membership ON membership.workId = citation.citingWorkId AND ${standingMember} WHERE citation.citedWorkId = work.id)`,
-};
+const columns: Record<Exclude<WorksQuery['sort']['field'], 'citationsHere'>, string> = { year: 'work.year', title: 'work.titleSort', references: 'work.referenceCount' };
 
 /** Works of a portfolio, filtered, sorted and paged in SQL. Works without the value sorted by stand last both ways; ties go by id. */
 export async function listWorks(portfolioId: number, query: WorksQuery): Promise<Page<WorkListItem>> {
@@ -60,9 +68,11 @@ export async function listWorks(portfolioId: number, query: WorksQuery): Promise
     Object.assign(replacements, searched.replacements);
   }
   const source = `FROM ${scope.from} WHERE ${where.join(' AND ')}`;
-  const key = sorts[query.sort.field];
-  const [[{ total }], rows] = await Promise.all([
-    select<{ total: number }>(null, `SELECT COUNT(*) AS total ${source}`, replacements),
+  const key = query.sort.field === 'citationsHere' ? scope.citationsHere : columns[query.sort.field];
+  const { limit: _limit, offset: _offset, ...filters } = replacements;
+  const [total, rows] = await Promise.all([
+    // The same for every page and order of a list.
+    asItStands(portfolioId, `works ${source} ${JSON.stringify(filters)}`, async () => Number((await select<{ total: number }>(null, `SELECT COUNT(*) AS total ${source}`, filters))[0].total)),
     // Only ids are sorted: titles and authors are fetched for the page alone.
     select<{ id: number }>(
       null,
@@ -70,5 +80,5 @@ export async function listWorks(portfolioId: number, query: WorksQuery): Promise
       replacements,
     ),
   ]);
-  return { items: await presentWorks(rows.map((row) => row.id), portfolioId), total: Number(total), page: query.page, pageSize: query.pageSize };
+  return { items: await presentWorks(rows.map((row) => row.id), portfolioId), total, page: query.page, pageSize: query.pageSize };
 }
