@@ -36,7 +36,7 @@ export function ConfirmedAction({ action, fields, label, subject, question }: Co
         <form action={submit} className="flex flex-wrap items-center gap-2">
           {hidden}
           {question && <p className="basis-full text-[13px]">{question}</p>}
-          <SubmitButton kind={question ? 'danger' : 'secondary'} label={`${label}: ${subject}`}>
+          <SubmitButton kind={question ? 'destructive' : 'secondary'} label={`${label}: ${subject}`}>
             {label}
           </SubmitButton>
           {question && (

@@ -1,3 +1,5 @@
+import { Skeleton } from '@/components/ui/status';
+
 /** Keeps the layout still while a page is on its way. */
 export function PageLoading() {
   return (
@@ -5,8 +7,8 @@ export function PageLoading() {
       <p role="status" className="sr-only">
         Loading
       </p>
-      <div className="h-9 w-64 max-w-full rounded-sm bg-thread motion-safe:animate-pulse" />
-      <div className="h-40 max-w-3xl rounded-sm bg-thread/60 motion-safe:animate-pulse" />
+      <Skeleton className="h-9 w-64 max-w-full" />
+      <Skeleton className="h-40 max-w-3xl" />
     </div>
   );
 }

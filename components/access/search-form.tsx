@@ -1,6 +1,9 @@
 import Form from 'next/form';
 import { useId } from 'react';
 
+import { Button } from '@/components/ui/button';
+import { controlClass } from '@/components/ui/field';
+
 /** A search whose words stand in the address. */
 export function SearchForm({ label, q, hint }: { label: string; q: string | undefined; hint?: string }) {
   const id = useId();
@@ -10,10 +13,10 @@ export function SearchForm({ label, q, hint }: { label: string; q: string | unde
         {label}
       </label>
       <div className="flex gap-2">
-        <input id={id} key={q} name="q" type="search" defaultValue={q} maxLength={300} aria-describedby={hint ? `${id}-hint` : undefined} className="min-w-0 flex-1 rounded-sm border border-thread-strong bg-paper px-3 py-1.5" />
-        <button type="submit" className="rounded-sm border border-indigo bg-paper px-4 py-1.5 font-semibold text-indigo">
+        <input id={id} key={q} name="q" type="search" defaultValue={q} maxLength={300} aria-describedby={hint ? `${id}-hint` : undefined} className={controlClass} />
+        <Button type="submit">
           Search
-        </button>
+        </Button>
       </div>
       {hint && (
         <p id={`${id}-hint`} className="text-[13px] text-ink-soft">

@@ -12,7 +12,7 @@ export default async function FirstRunPage() {
   if (!(await needsFirstRun())) redirect('/sign-in');
   return (
     <>
-      <h1 className="font-serif text-[31px] leading-[35px]">Set up Heddle</h1>
+      <h1 className="text-[31px] leading-[35px]">Set up Heddle</h1>
       <p className="text-ink-soft">Nobody has an account here yet. Yours will be the administrator&apos;s; with it you invite everybody else.</p>
       <FirstRunForm />
     </>

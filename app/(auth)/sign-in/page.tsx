@@ -29,7 +29,7 @@ export default async function SignInPage({ searchParams }: { searchParams: Promi
   const demonstration = await demonstrationHint();
   return (
     <>
-      <h1 className="font-serif text-[31px] leading-[35px]">Sign in</h1>
+      <h1 className="text-[31px] leading-[35px]">Sign in</h1>
       <SignInForm next={next} message={messageOf(query)} />
       {demonstration && (
         <section aria-labelledby="demonstration" className="border-t border-thread pt-4 text-[13px]">

@@ -15,25 +15,25 @@ export default async function AccountPage() {
   return (
     <div className="grid max-w-[60rem] gap-10 px-4 py-6 sm:px-7">
       <header>
-        <h1 className="font-serif text-[31px] leading-[35px]">Account</h1>
+        <h1 className="text-[31px] leading-[35px]">Account</h1>
         <p className="text-ink-soft">
           {actor.email}, {actor.role}
         </p>
       </header>
       <section aria-labelledby="name" className="grid max-w-md gap-3">
-        <h2 id="name" className="font-serif text-[21px] leading-[25px]">
+        <h2 id="name" className="text-[21px] leading-[25px]">
           Name
         </h2>
         <NameForm name={actor.name} />
       </section>
       <section aria-labelledby="password" className="grid max-w-md gap-3">
-        <h2 id="password" className="font-serif text-[21px] leading-[25px]">
+        <h2 id="password" className="text-[21px] leading-[25px]">
           Password
         </h2>
         <PasswordForm email={actor.email} />
       </section>
       <section aria-labelledby="tokens" className="grid gap-3">
-        <h2 id="tokens" className="font-serif text-[21px] leading-[25px]">
+        <h2 id="tokens" className="text-[21px] leading-[25px]">
           Tokens for scripts
         </h2>
         <p className="max-w-prose text-ink-soft">

@@ -23,20 +23,20 @@ export default async function PeoplePage({ searchParams }: { searchParams: Searc
   ]);
   return (
     <>
-      <h1 className="font-serif text-[31px] leading-[35px]">People</h1>
+      <h1 className="text-[31px] leading-[35px]">People</h1>
       <section aria-label="Accounts" className="grid gap-4">
         <SearchForm label="Find by name or e-mail" q={q} />
         {users.total === 0 ? <p>Nobody is called like that. Search for part of a name or address.</p> : <UserTable users={users.items} ownId={String(actor.userId)} />}
         <PageLinks path="/admin" query={{ q }} page={page} pageSize={50} total={users.total} />
       </section>
       <section aria-labelledby="invitations" className="grid gap-4">
-        <h2 id="invitations" className="font-serif text-[21px] leading-[25px]">
+        <h2 id="invitations" className="text-[21px] leading-[25px]">
           Open invitations
         </h2>
         {invitations.total === 0 ? <p className="text-ink-soft">No invitation is open. Invite somebody below.</p> : <InvitationTable invitations={invitations.items} />}
       </section>
       <section aria-labelledby="invite" className="grid max-w-md gap-3">
-        <h2 id="invite" className="font-serif text-[21px] leading-[25px]">
+        <h2 id="invite" className="text-[21px] leading-[25px]">
           Invite somebody
         </h2>
         <InviteForm />

@@ -16,7 +16,7 @@ export function RoleForm({ userId, name, role }: { userId: string; name: string;
     <form action={submit}>
       <input type="hidden" name="id" value={userId} />
       <div className="flex gap-2">
-        <select name="role" aria-label={`Role of ${name}`} value={chosen} onChange={(event) => setChosen(event.target.value)} className="rounded-sm border border-thread-strong bg-paper px-2 py-1">
+        <select name="role" aria-label={`Role of ${name}`} value={chosen} onChange={(event) => setChosen(event.target.value)} className="min-h-9 rounded-sm border border-thread-strong bg-paper px-2 py-1 text-ink">
           {roles.map((each) => (
             <option key={each}>{each}</option>
           ))}

@@ -3,6 +3,7 @@ import { RoleForm } from '@/app/(workspace)/admin/role-form';
 import { ConfirmedAction } from '@/components/access/confirmed-action';
 import { Moment } from '@/components/access/moment';
 import { Cell, HeadCell, SimpleTable } from '@/components/access/simple-table';
+import { Pill } from '@/components/ui/status';
 import { type UserView } from '@/lib/access/users';
 
 export function UserTable({ users, ownId }: { users: UserView[]; ownId: string }) {
@@ -23,7 +24,7 @@ export function UserTable({ users, ownId }: { users: UserView[]; ownId: string }
         <tr key={user.id}>
           <Cell>
             {user.name}
-            {user.demonstration && <span className="block text-[13px] text-ink-soft">Demonstration</span>}
+            {user.demonstration && <span className="block"><Pill>Demonstration</Pill></span>}
           </Cell>
           <Cell>{user.email}</Cell>
           <Cell>
@@ -35,7 +36,7 @@ export function UserTable({ users, ownId }: { users: UserView[]; ownId: string }
               <span className="text-ink-soft">This is you</span>
             ) : user.disabled ? (
               <>
-                <span className="text-madder">Disabled</span>
+                <Pill tone="problem">Disabled</Pill>
                 <ConfirmedAction action={setDisabled} fields={{ id: user.id, disabled: 'no' }} label="Enable" subject={user.name} />
               </>
             ) : (

@@ -10,7 +10,7 @@ export default async function InvitationPage({ params }: { params: Promise<{ tok
   const invitation = await findInvitation(token);
   return (
     <>
-      <h1 className="font-serif text-[31px] leading-[35px]">Your invitation</h1>
+      <h1 className="text-[31px] leading-[35px]">Your invitation</h1>
       {invitation ? (
         <>
           <p className="text-ink-soft">

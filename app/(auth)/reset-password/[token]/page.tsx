@@ -11,7 +11,7 @@ export default async function ResetPasswordPage({ params }: { params: Promise<{ 
   const reset = await findPasswordReset(token);
   return (
     <>
-      <h1 className="font-serif text-[31px] leading-[35px]">Set a new password</h1>
+      <h1 className="text-[31px] leading-[35px]">Set a new password</h1>
       {reset ? (
         <>
           <p className="text-ink-soft">

@@ -18,7 +18,7 @@ export default async function AuditPage({ searchParams }: { searchParams: Search
   const events = await listAudit({ page, pageSize: 50, q });
   return (
     <>
-      <h1 className="font-serif text-[31px] leading-[35px]">Audit log</h1>
+      <h1 className="text-[31px] leading-[35px]">Audit log</h1>
       <SearchForm label="Show only what begins with" q={q} hint="For example session, user, invitation, import" />
       {events.total === 0 ? (
         <p>Nothing was written down that begins so.</p>

@@ -4,6 +4,8 @@ import { z } from 'zod';
 import { MailText } from '@/app/(workspace)/admin/mail/mail-text';
 import { Moment } from '@/components/access/moment';
 import { PageLinks } from '@/components/access/page-links';
+import { ButtonLink } from '@/components/ui/button';
+import { EmptyState, Pill } from '@/components/ui/status';
 import { actorForPageOf } from '@/lib/access/actor';
 import { readPageQuery, type SearchParams } from '@/lib/access/page-query';
 import { paging } from '@/lib/api/schemas';
@@ -11,7 +13,7 @@ import { hasMailServer, listMails } from '@/lib/services/mail';
 
 export const metadata: Metadata = { title: 'Mail' };
 
-const states = { kept: 'Kept here', sent: 'Sent', failed: 'Not sent' };
+const states = { kept: { words: 'Kept here', tone: 'neutral' }, sent: { words: 'Sent', tone: 'done' }, failed: { words: 'Not sent', tone: 'problem' } } as const;
 
 export default async function MailPage({ searchParams }: { searchParams: SearchParams }) {
   await actorForPageOf('mail.view');
@@ -20,10 +22,14 @@ export default async function MailPage({ searchParams }: { searchParams: SearchP
   return (
     <>
       <header>
-        <h1 className="font-serif text-[31px] leading-[35px]">Mail</h1>
+        <h1 className="text-[31px] leading-[35px]">Mail</h1>
         <p className="max-w-prose text-ink-soft">{hasMailServer() ? 'Every message of the service.' : 'No mail server is set up (SMTP_URL), so every message is kept here. Pass its link on to the person it is for, and to nobody else.'}</p>
       </header>
-      {mails.total === 0 && <p>No message was written yet. Inviting somebody writes the first.</p>}
+      {mails.total === 0 && (
+        <EmptyState title="No message was written yet" action={<ButtonLink href="/admin">To the people</ButtonLink>}>
+          Inviting somebody writes the first.
+        </EmptyState>
+      )}
       <ul className="grid max-w-3xl gap-4">
         {mails.items.map((mail) => (
           <li key={mail.id}>
@@ -33,7 +39,7 @@ export default async function MailPage({ searchParams }: { searchParams: SearchP
                   {mail.subject}
                 </h2>
                 <p className="text-[13px] text-ink-soft">
-                  To {mail.recipient}, <Moment at={mail.createdAt} />, <span className={mail.state === 'failed' ? 'text-madder' : undefined}>{states[mail.state]}</span>
+                  To {mail.recipient}, <Moment at={mail.createdAt} />, <Pill tone={states[mail.state].tone}>{states[mail.state].words}</Pill>
                 </p>
               </header>
               {mail.error && <p className="text-[13px] text-madder">{mail.error}</p>}

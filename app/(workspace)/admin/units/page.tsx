@@ -14,7 +14,7 @@ export default async function UnitsPage() {
   return (
     <>
       <header>
-        <h1 className="font-serif text-[31px] leading-[35px]">Units</h1>
+        <h1 className="text-[31px] leading-[35px]">Units</h1>
         <p className="text-ink-soft">Faculties, departments and groups of the institution. Portfolios belong to them.</p>
       </header>
       {units.length === 0 ? (
@@ -37,7 +37,7 @@ export default async function UnitsPage() {
         </ul>
       )}
       <section aria-labelledby="add" className="grid max-w-md gap-3">
-        <h2 id="add" className="font-serif text-[21px] leading-[25px]">
+        <h2 id="add" className="text-[21px] leading-[25px]">
           Add a unit
         </h2>
         <UnitForm units={units} unit={null} />
