@@ -3,7 +3,7 @@ import { z } from 'zod';
 
 import { escapeLike } from '@/lib/access/escape-like';
 import { grantLevelOf } from '@/lib/access/grants';
-import { may, type Actor } from '@/lib/access/permissions';
+import { may, type Actor, type GrantLevel } from '@/lib/access/permissions';
 import { paging, sortBy, type Page } from '@/lib/api/schemas';
 import { type PortfolioView } from '@/lib/api/types';
 import { database } from '@/lib/db/connection';
@@ -66,6 +66,12 @@ export async function deletePortfolio(row: Portfolio): Promise<void> {
   await row.update({ deletedAt: new Date() });
 }
 
+/** What the person holds in a portfolio, deleted or not. */
+async function heldLevel(actor: Actor, portfolioId: number): Promise<GrantLevel | null> {
+  if (actor.role === 'administrator') return 'manage';
+  return (await PortfolioGrant.findOne({ where: { portfolioId, userId: actor.userId } }))?.level ?? null;
+}
+
 export async function restorePortfolio(actor: Actor, portfolioId: number): Promise<PortfolioView> {
   const row = await Portfolio.findByPk(portfolioId);
   if (!row) throw notFound();
@@ -75,9 +81,16 @@ export async function restorePortfolio(actor: Actor, portfolioId: number): Promi
     if (!may(actor, 'portfolio.edit', level)) throw forbidden('Your role or your grant does not allow this.');
     throw conflict('The portfolio was not deleted, or somebody brought it back already.');
   }
-  const held = actor.role === 'administrator' ? 'manage' : ((await PortfolioGrant.findOne({ where: { portfolioId, userId: actor.userId } }))?.level ?? null);
   // Deleted, it exists only for those who could have deleted it.
-  if (!may(actor, 'portfolio.edit', held)) throw notFound();
+  if (!may(actor, 'portfolio.edit', await heldLevel(actor, portfolioId))) throw notFound();
   await row.update({ deletedAt: null });
   return presentOne(actor, row);
+}
+
+/** Name of a deleted portfolio that this person could bring back, or null. */
+export async function deletedPortfolio(actor: Actor, portfolioId: unknown): Promise<{ id: string; name: string } | null> {
+  if (typeof portfolioId !== 'string' || !/^[1-9]\d{0,15}$/.test(portfolioId)) return null;
+  const row = await Portfolio.findOne({ where: { id: Number(portfolioId), deletedAt: { [Op.ne]: null } } });
+  if (!row || !may(actor, 'portfolio.edit', await heldLevel(actor, row.id))) return null;
+  return { id: String(row.id), name: row.name };
 }
