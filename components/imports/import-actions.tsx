@@ -1,0 +1,45 @@
+'use client';
+
+import { useState } from 'react';
+
+import { isUndoing } from '@/components/imports/import-words';
+import { ReadAgain } from '@/components/imports/read-again';
+import { Button } from '@/components/ui/button';
+import { formatNumber } from '@/components/ui/numbers';
+import { Notice } from '@/components/ui/status';
+import { messageOf, send } from '@/lib/api/client';
+import { type ImportView } from '@/lib/api/types';
+
+/** What can be done with an import where it stands. Nothing here asks first: all of it can be taken back. */
+export function ImportActions({ row, onChanged }: { row: ImportView; onChanged: (row?: ImportView) => void }) {
+  const [sending, setSending] = useState<string | null>(null);
+  const [problem, setProblem] = useState<string | null>(null);
+  const act = async (what: 'accept' | 'set-aside' | 'undo' | 'cancel') => {
+    setSending(what);
+    setProblem(null);
+    try {
+      onChanged(await send<ImportView>('POST', `/api/imports/${row.id}/${what}`));
+    } catch (error) {
+      setProblem(messageOf(error));
+      // Somebody else may have moved it meanwhile.
+      onChanged();
+    } finally {
+      setSending(null);
+    }
+  };
+  const acceptable = row.counts ? row.counts.records - row.counts.rejected : 0;
+  const { state } = row;
+  const waits = state === 'review' || state === 'set-aside' || state === 'undone';
+  return (
+    <div className="grid justify-items-end gap-2">
+      <div className="flex flex-wrap justify-end gap-2">
+        {(waits || state === 'failed') && <ReadAgain row={row} onRead={onChanged} />}
+        {(state === 'uploaded' || state === 'reading' || state === 'checking') && <Button disabled={sending !== null} onClick={() => act('cancel')}>Stop reading</Button>}
+        {(state === 'review' || state === 'failed') && <Button disabled={sending !== null} onClick={() => act('set-aside')}>Set aside</Button>}
+        {waits && acceptable > 0 && <Button kind="primary" disabled={sending !== null} onClick={() => act('accept')}>Accept {formatNumber(acceptable)} now</Button>}
+        {state === 'accepted' && !isUndoing(row) && <Button disabled={sending !== null} onClick={() => act('undo')}>Undo import</Button>}
+      </div>
+      {problem && <Notice tone="problem">{problem}</Notice>}
+    </div>
+  );
+}
