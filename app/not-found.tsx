@@ -1,0 +1,13 @@
+import Link from 'next/link';
+
+export default function NotFound() {
+  return (
+    <main id="main" className="mx-auto grid max-w-[36rem] gap-3 px-6 py-24">
+      <h1 className="text-[31px] leading-[35px]">There is nothing here</h1>
+      <p>The address may be mistyped, the thing may be gone, or it was not given to you.</p>
+      <p>
+        <Link href="/portfolios">Go to the portfolios</Link>
+      </p>
+    </main>
+  );
+}
