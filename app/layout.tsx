@@ -8,13 +8,11 @@ import { type Metadata, type Viewport } from 'next';
 import { headers } from 'next/headers';
 import { type ReactNode } from 'react';
 
+import { schemeScript } from '@/components/frame/scheme-script';
 import { ToastProvider } from '@/components/ui/toast';
 
 export const metadata: Metadata = { title: { default: 'Heddle', template: '%s · Heddle' }, description: 'A checked citation network from bibliography exports' };
 export const viewport: Viewport = { width: 'device-width', initialScale: 1, themeColor: [{ media: '(prefers-color-scheme: light)', color: '#f7f3ea' }, { media: '(prefers-color-scheme: dark)', color: '#181a1e' }] };
-
-/** Runs before the first paint, so that no page flashes in the wrong scheme. */
-const schemeScript = `(function(){try{var s=localStorage.getItem('heddle-scheme');var d=s==='dark'||(s!=='light'&&matchMedia('(prefers-color-scheme: dark)').matches);document.documentElement.dataset.scheme=d?'dark':'light';}catch(e){document.documentElement.dataset.scheme='light';}})()`;
 
 export default async function RootLayout({ children }: { children: ReactNode }) {
   const nonce = (await headers()).get('x-nonce') ?? undefined;
@@ -24,7 +22,7 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
         <script nonce={nonce} suppressHydrationWarning dangerouslySetInnerHTML={{ __html: schemeScript }} />
       </head>
       <body>
-        <a href="#main" className="absolute left-2 top-2 z-50 -translate-y-20 rounded-sm bg-paper px-3 py-2 font-semibold focus:translate-y-0">
+        <a href="#main" className="no-print absolute top-2 left-2 z-50 -translate-y-20 rounded-sm border border-indigo bg-paper px-3 py-2 font-semibold focus:translate-y-0">
           Skip to content
         </a>
         <ToastProvider>{children}</ToastProvider>

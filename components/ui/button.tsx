@@ -10,7 +10,7 @@ const looks: Record<ButtonKind, string> = {
   quiet: 'border-transparent bg-transparent text-ink-soft hover:text-ink',
   destructive: 'border-madder bg-transparent text-madder hover:bg-madder-wash',
 };
-const shape = 'inline-flex min-h-9 items-center justify-center gap-2 rounded-sm border px-3.5 py-1.5 text-[14px] font-semibold whitespace-nowrap no-underline disabled:opacity-60 aria-disabled:opacity-60';
+const shape = 'inline-flex min-h-9 items-center justify-center gap-2 rounded-sm border px-3.5 py-1.5 text-table font-semibold whitespace-nowrap no-underline disabled:opacity-60 aria-disabled:opacity-60';
 
 export function Button({ kind = 'secondary', type = 'button', className, ...props }: { kind?: ButtonKind } & ComponentProps<'button'>) {
   return <button type={type} className={clsx(shape, looks[kind], className)} {...props} />;

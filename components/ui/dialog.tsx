@@ -18,12 +18,12 @@ function Frame({ open, onOpenChange, title, description, children, className }: 
   return (
     <Headless.Root open={open} onOpenChange={onOpenChange}>
       <Headless.Portal>
-        <Headless.Overlay className="fixed inset-0 z-40 bg-[rgb(20_22_26/0.42)]" />
-        <Headless.Content {...(description ? {} : { 'aria-describedby': undefined })} className={`fixed z-50 overflow-y-auto border border-thread bg-paper p-5 shadow-[0_12px_40px_rgb(20_22_26/0.22)] sm:p-6 ${className}`}>
+        <Headless.Overlay className="fixed inset-0 z-40 bg-[rgb(20_22_26/0.45)]" />
+        <Headless.Content {...(description ? {} : { 'aria-describedby': undefined })} className={`fixed z-50 overflow-y-auto border border-thread bg-paper p-5 shadow-float sm:p-6 ${className}`}>
           <div className="mb-4 flex items-start justify-between gap-4">
             <div>
-              <Headless.Title className="text-[21px] leading-[25px]">{title}</Headless.Title>
-              {description && <Headless.Description className="mt-1 text-[14px] text-ink-soft">{description}</Headless.Description>}
+              <Headless.Title className="text-panel">{title}</Headless.Title>
+              {description && <Headless.Description className="mt-1 text-table text-ink-soft">{description}</Headless.Description>}
             </div>
             <Headless.Close asChild>
               <IconButton label="Close" className="-mt-1 -mr-1 border-transparent">

@@ -3,7 +3,9 @@
 import { clsx } from 'clsx';
 import { useId, type ComponentProps, type ReactNode } from 'react';
 
-export const controlClass = 'min-h-9 w-full rounded-sm border border-thread-strong bg-paper px-3 py-1.5 text-ink aria-[invalid=true]:border-madder';
+import { Icon } from '@/components/ui/icons';
+
+export const controlClass = 'min-h-9 w-full rounded-sm border border-thread-strong bg-paper px-3 py-1.5 text-ink hover:border-ink-soft disabled:opacity-60 aria-[invalid=true]:border-madder';
 
 interface FieldProps {
   label: string;
@@ -25,12 +27,12 @@ export function Field({ label, hint, error, labelHidden, children, className }: 
   const described = [error && `${id}-error`, hint && `${id}-hint`].filter(Boolean).join(' ');
   return (
     <div className={clsx('grid gap-1', className)}>
-      <label htmlFor={id} className={labelHidden ? 'sr-only' : 'text-[13px] font-semibold'}>
+      <label htmlFor={id} className={labelHidden ? 'sr-only' : 'text-small font-semibold'}>
         {label}
       </label>
       {children({ id, ...(error ? { 'aria-invalid': true as const } : {}), ...(described ? { 'aria-describedby': described } : {}) })}
-      {error && <p id={`${id}-error`} className="text-[13px] text-madder">{error}</p>}
-      {hint && <p id={`${id}-hint`} className="text-[13px] leading-[18px] text-ink-soft">{hint}</p>}
+      {error && <p id={`${id}-error`} className="text-small text-madder">{error}</p>}
+      {hint && <p id={`${id}-hint`} className="text-small text-ink-soft">{hint}</p>}
     </div>
   );
 }
@@ -55,9 +57,12 @@ export function SelectField({ label, hint, error, labelHidden, className, childr
   return (
     <Field label={label} hint={hint} error={error} labelHidden={labelHidden} className={className}>
       {(wiring) => (
-        <select {...select} {...wiring} className={clsx(controlClass, 'pr-8')}>
-          {children}
-        </select>
+        <span className="relative grid">
+          <select {...select} {...wiring} className={clsx(controlClass, 'appearance-none truncate pr-9')}>
+            {children}
+          </select>
+          <Icon name="down" size={14} className="pointer-events-none absolute top-1/2 right-3 -translate-y-1/2 text-ink-soft" />
+        </span>
       )}
     </Field>
   );
@@ -70,7 +75,7 @@ export function Checkbox({ label, hint, className, ...input }: { label: ReactNod
       <input type="checkbox" id={id} {...input} className="mt-0.5 size-[18px] shrink-0 accent-[var(--indigo)]" />
       <label htmlFor={id} className="grid gap-0.5">
         <span>{label}</span>
-        {hint && <span className="text-[13px] leading-[18px] text-ink-soft">{hint}</span>}
+        {hint && <span className="text-small text-ink-soft">{hint}</span>}
       </label>
     </div>
   );
@@ -80,13 +85,13 @@ export function Checkbox({ label, hint, className, ...input }: { label: ReactNod
 export function RadioGroup<Value extends string>({ legend, name, value, options, onChange, className }: { legend: string; name: string; value: Value; options: readonly { value: Value; label: string; hint?: string }[]; onChange: (value: Value) => void; className?: string }) {
   return (
     <fieldset className={clsx('grid gap-1.5', className)}>
-      <legend className="mb-1 text-[13px] font-semibold">{legend}</legend>
+      <legend className="mb-1 text-small font-semibold">{legend}</legend>
       {options.map((option) => (
         <label key={option.value} className="flex items-start gap-2.5">
           <input type="radio" name={name} value={option.value} checked={option.value === value} onChange={() => onChange(option.value)} className="mt-0.5 size-[18px] shrink-0 accent-[var(--indigo)]" />
           <span className="grid">
             <span>{option.label}</span>
-            {option.hint && <span className="text-[13px] leading-[18px] text-ink-soft">{option.hint}</span>}
+            {option.hint && <span className="text-small text-ink-soft">{option.hint}</span>}
           </span>
         </label>
       ))}

@@ -4,7 +4,7 @@ import { DropdownMenu } from 'radix-ui';
 import Link from 'next/link';
 import { type ReactNode } from 'react';
 
-const item = 'flex min-h-9 cursor-pointer items-center gap-2 px-3 py-1.5 text-[14px] text-ink no-underline outline-none data-[highlighted]:bg-weld-wash data-[disabled]:opacity-50';
+const item = 'flex min-h-9 cursor-pointer items-center gap-2 px-3 py-1.5 text-table text-ink no-underline outline-none data-[highlighted]:bg-weld-wash data-[disabled]:opacity-50';
 
 /** A menu on a button. The trigger is one focusable element. */
 export function Menu({ trigger, label, children, align = 'end' }: { trigger: ReactNode; label: string; children: ReactNode; align?: 'start' | 'end' }) {
@@ -12,7 +12,7 @@ export function Menu({ trigger, label, children, align = 'end' }: { trigger: Rea
     <DropdownMenu.Root modal={false}>
       <DropdownMenu.Trigger asChild>{trigger}</DropdownMenu.Trigger>
       <DropdownMenu.Portal>
-        <DropdownMenu.Content align={align} sideOffset={6} aria-label={label} className="z-50 min-w-44 rounded-sm border border-thread bg-paper py-1 shadow-[0_8px_28px_rgb(20_22_26/0.18)]">
+        <DropdownMenu.Content align={align} sideOffset={6} aria-label={label} className="z-50 min-w-44 rounded-sm border border-thread bg-paper py-1 shadow-float">
           {children}
         </DropdownMenu.Content>
       </DropdownMenu.Portal>
@@ -46,8 +46,22 @@ export function MenuCheckbox({ checked, onCheckedChange, children }: { checked: 
   );
 }
 
+/** One of a few: the scheme, the order. */
+export function MenuChoice<Value extends string>({ value, options, onChange }: { value: Value; options: readonly { value: Value; label: ReactNode }[]; onChange: (value: Value) => void }) {
+  return (
+    <DropdownMenu.RadioGroup value={value} onValueChange={(next) => onChange(next as Value)}>
+      {options.map((option) => (
+        <DropdownMenu.RadioItem key={option.value} value={option.value} className={item} onSelect={(event) => event.preventDefault()}>
+          <span aria-hidden="true" className="grid size-4 place-items-center rounded-full border border-thread-strong">{option.value === value && <span className="size-2 rounded-full bg-indigo" />}</span>
+          {option.label}
+        </DropdownMenu.RadioItem>
+      ))}
+    </DropdownMenu.RadioGroup>
+  );
+}
+
 export function MenuLabel({ children }: { children: ReactNode }) {
-  return <DropdownMenu.Label className="px-3 py-1.5 text-[12.5px] font-semibold text-ink-soft">{children}</DropdownMenu.Label>;
+  return <DropdownMenu.Label className="px-3 py-1.5 text-head font-semibold text-ink-soft">{children}</DropdownMenu.Label>;
 }
 
 export function MenuSeparator() {

@@ -19,9 +19,9 @@ export function Progress({ label, done, total, detail, still, className }: Progr
   return (
     <div className={clsx('grid gap-1', className)}>
       <div role="progressbar" aria-label={label} aria-valuemin={0} aria-valuemax={100} {...(share === null ? {} : { 'aria-valuenow': Math.round(share * 100) })} aria-valuetext={detail} className="h-2.5 overflow-hidden rounded-sm bg-[var(--bar-ground)]">
-        <div className={clsx('h-full bg-indigo transition-[width]', !still && 'weave')} style={{ width: `${share === null ? 100 : Math.max(1, share * 100)}%` }} />
+        <div className={clsx('keep-colour h-full transition-[width]', share === null ? 'bg-[var(--bar)]' : 'bg-indigo', still ? 'weave-still' : 'weave')} style={{ width: `${share === null ? 100 : Math.max(1, share * 100)}%` }} />
       </div>
-      {detail && <p className="text-[13px] text-ink-soft">{detail}</p>}
+      {detail && <p className="text-small text-ink-soft">{detail}</p>}
     </div>
   );
 }

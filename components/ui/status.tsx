@@ -13,13 +13,13 @@ const tones: Record<Tone, string> = {
 
 /** A state in one or two words. */
 export function Pill({ tone = 'neutral', children }: { tone?: Tone; children: ReactNode }) {
-  return <span className={clsx('inline-flex items-center rounded-full border px-2.5 py-px text-[12.5px] leading-[18px] whitespace-nowrap', tones[tone])}>{children}</span>;
+  return <span className={clsx('inline-flex items-center rounded-full border px-2.5 py-px text-head leading-[1.125rem] whitespace-nowrap', tones[tone])}>{children}</span>;
 }
 
 /** A pill that filters; `href` reproduces the view. */
 export function PillLink({ tone = 'neutral', href, current, children }: { tone?: Tone; href: string; current?: boolean; children: ReactNode }) {
   return (
-    <Link href={href} scroll={false} aria-current={current ? 'true' : undefined} className={clsx('inline-flex min-h-6 items-center rounded-full border px-2.5 py-px text-[12.5px] leading-[18px] whitespace-nowrap no-underline hover:underline aria-[current]:ring-1 aria-[current]:ring-current', tones[tone])}>
+    <Link href={href} scroll={false} aria-current={current ? 'true' : undefined} className={clsx('inline-flex min-h-6 items-center rounded-full border px-2.5 py-px text-head leading-[1.125rem] whitespace-nowrap no-underline hover:underline aria-[current]:ring-1 aria-[current]:ring-current', tones[tone])}>
       {children}
     </Link>
   );
@@ -28,7 +28,7 @@ export function PillLink({ tone = 'neutral', href, current, children }: { tone?:
 /** One short line of caution with a link to the methods page. */
 export function Caution({ children, href = '/methods#cautions' }: { children: ReactNode; href?: string | null }) {
   return (
-    <p className="border-l-[3px] border-weld py-0.5 pl-2.5 text-[13px] leading-[18px] text-ink-soft">
+    <p className="border-l-[3px] border-weld py-0.5 pl-2.5 text-small text-ink-soft">
       {children} {href && <Link href={href} className="ml-1 whitespace-nowrap">Cautions</Link>}
     </p>
   );
@@ -37,7 +37,7 @@ export function Caution({ children, href = '/methods#cautions' }: { children: Re
 /** What came of something, within the page. */
 export function Notice({ tone = 'neutral', title, children, actions }: { tone?: Tone; title?: string; children?: ReactNode; actions?: ReactNode }) {
   return (
-    <div role={tone === 'problem' ? 'alert' : 'status'} className={clsx('flex flex-wrap items-center justify-between gap-3 border-l-[3px] px-3 py-2 text-[14px]', tones[tone])}>
+    <div role={tone === 'problem' ? 'alert' : 'status'} className={clsx('flex flex-wrap items-center justify-between gap-3 border-l-[3px] px-3 py-2 text-table', tones[tone])}>
       <div>
         {title && <p className="font-semibold">{title}</p>}
         {children && <div className="text-ink">{children}</div>}
@@ -51,7 +51,7 @@ export function Notice({ tone = 'neutral', title, children, actions }: { tone?: 
 export function EmptyState({ title, children, action }: { title: string; children?: ReactNode; action?: ReactNode }) {
   return (
     <div className="grid justify-items-start gap-2 border-y border-thread px-1 py-10">
-      <p className="font-serif text-[21px] leading-[25px]">{title}</p>
+      <p className="font-serif text-panel">{title}</p>
       {children && <div className="max-w-[38rem] text-ink-soft">{children}</div>}
       {action && <div className="mt-2">{action}</div>}
     </div>
