@@ -1,0 +1,61 @@
+export type Scheme = 'light' | 'dark';
+
+/** The cluster dyes of app/globals.css as numbers: WebGL and exported pictures cannot read custom properties. A test keeps both alike. */
+const dyes: Record<Scheme, readonly string[]> = {
+  light: ['#3430c1', '#b93e15', '#c0c100', '#017c6e', '#b564bb', '#792713', '#5ab7f4', '#899a58', '#fd80ab', '#5d3c72'],
+  dark: ['#7f7bff', '#e2683d', '#d0d126', '#22a896', '#c982ce', '#b3604a', '#6cc1f7', '#a1b36d', '#fd92b7', '#9b76b4'],
+};
+
+export interface Inks {
+  ground: string;
+  ink: string;
+  inkSoft: string;
+  thread: string;
+  none: string;
+  selected: string;
+  retracted: string;
+}
+
+export const inks: Record<Scheme, Inks> = {
+  light: { ground: '#fffdf8', ink: '#20242b', inkSoft: '#565b63', thread: '#8b816d', none: '#b9b09b', selected: '#b98512', retracted: '#a23b2e' },
+  dark: { ground: '#202329', ink: '#ece7db', inkSoft: '#b3b0a6', thread: '#7d8390', none: '#8d8676', selected: '#d3a43a', retracted: '#f0917f' },
+};
+
+/** Clusters beyond the tenth, and works without one, are left undyed. */
+export function dyeOf(cluster: number, scheme: Scheme): string {
+  return dyes[scheme][cluster] ?? inks[scheme].none;
+}
+
+/** The same as a custom property, for HTML. */
+export function dyeVariable(cluster: number): string {
+  return cluster >= 0 && cluster < dyes.light.length ? `var(--dye-${cluster + 1})` : 'var(--dye-none)';
+}
+
+/** "#rrggbb" with an opacity of 0..1 as rgba(). */
+export function withOpacity(hex: string, opacity: number): string {
+  const [red, green, blue] = [1, 3, 5].map((from) => Number.parseInt(hex.slice(from, from + 2), 16));
+  return `rgba(${red},${green},${blue},${opacity})`;
+}
+
+/** Lines of the weave that tells patches apart without colour: degrees, and pixels between threads. */
+export interface Weave {
+  angles: readonly number[];
+  spacing: number;
+}
+
+const weaves: readonly Weave[] = [
+  { angles: [45], spacing: 6 },
+  { angles: [0], spacing: 6 },
+  { angles: [135], spacing: 6 },
+  { angles: [90], spacing: 6 },
+  { angles: [0, 90], spacing: 8 },
+  { angles: [45], spacing: 10 },
+  { angles: [0], spacing: 10 },
+  { angles: [135], spacing: 10 },
+  { angles: [90], spacing: 10 },
+  { angles: [45, 135], spacing: 10 },
+];
+
+export function weaveOf(cluster: number): Weave | null {
+  return weaves[cluster] ?? null;
+}
