@@ -12,19 +12,20 @@ export async function loadAnalysis({ params }: { actor: Actor; params: { analysi
   return row && { row, portfolioId: row.portfolioId };
 }
 
+/** A row that was just made has no value yet, not even null, where none was given. */
 function present(row: Analysis, createdBy: string | null): AnalysisView {
   return {
     id: String(row.id),
     portfolioId: String(row.portfolioId),
     state: row.state,
     parameters: row.parameters,
-    progress: { stage: row.progressStage, done: Number(row.progressDone), total: Number(row.progressTotal) },
-    coverage: row.coverage,
-    summary: row.summary,
-    fingerprints: { input: row.inputFingerprint, result: row.resultFingerprint },
-    verified: row.verified,
-    engine: row.engine,
-    error: row.error,
+    progress: { stage: row.progressStage ?? null, done: Number(row.progressDone), total: Number(row.progressTotal) },
+    coverage: row.coverage ?? null,
+    summary: row.summary ?? null,
+    fingerprints: { input: row.inputFingerprint ?? null, result: row.resultFingerprint ?? null },
+    verified: row.verified ?? null,
+    engine: row.engine ?? null,
+    error: row.error ?? null,
     createdBy,
     createdAt: row.createdAt.toISOString(),
     startedAt: row.startedAt?.toISOString() ?? null,

@@ -124,7 +124,8 @@ function conditionOf(analysisId: number, filters: WorkFilters, letters: ClusterL
     where.push(sql);
     replacements[name] = value;
   };
-  (filters.q ?? '').split(/\s+/).filter(Boolean).slice(0, 12).forEach((word, index) => add(`CONCAT_WS(' ', title, authorsLabel, venue, doi) LIKE :word${index}`, `word${index}`, `%${escapeLike(word)}%`));
+  // DOIs stand apart: their column is compared byte by byte, and would make the whole text so.
+  (filters.q ?? '').split(/\s+/).filter(Boolean).slice(0, 12).forEach((word, index) => add(`(CONCAT_WS(' ', title, authorsLabel, venue) LIKE :word${index} OR doi LIKE LOWER(:word${index}))`, `word${index}`, `%${escapeLike(word)}%`));
   if (filters.yearFrom !== undefined) add('year >= :yearFrom', 'yearFrom', filters.yearFrom);
   if (filters.yearTo !== undefined) add('year <= :yearTo', 'yearTo', filters.yearTo);
   if (filters.catalogued !== undefined) add('catalogued = :catalogued', 'catalogued', filters.catalogued === 'true' ? 1 : 0);
