@@ -8,6 +8,8 @@ import { Icon } from '@/components/ui/icons';
 export const controlClass = 'min-h-9 w-full rounded-sm border border-thread-strong bg-paper px-3 py-1.5 text-ink hover:border-ink-soft disabled:opacity-60 aria-[invalid=true]:border-madder';
 
 interface FieldProps {
+  /** Made up unless given; an error summary needs to know it. */
+  id?: string;
   label: string;
   hint?: ReactNode;
   error?: string;
@@ -22,8 +24,9 @@ interface Wiring {
 }
 
 /** Label, control, hint and error of one field, tied together. */
-export function Field({ label, hint, error, labelHidden, children, className }: FieldProps & { className?: string; children: (wiring: Wiring) => ReactNode }) {
-  const id = useId();
+export function Field({ id: givenId, label, hint, error, labelHidden, children, className }: FieldProps & { className?: string; children: (wiring: Wiring) => ReactNode }) {
+  const madeId = useId();
+  const id = givenId ?? madeId;
   const described = [error && `${id}-error`, hint && `${id}-hint`].filter(Boolean).join(' ');
   return (
     <div className={clsx('grid gap-1', className)}>
@@ -37,25 +40,25 @@ export function Field({ label, hint, error, labelHidden, children, className }: 
   );
 }
 
-export function TextField({ label, hint, error, labelHidden, className, ...input }: FieldProps & ComponentProps<'input'>) {
+export function TextField({ id, label, hint, error, labelHidden, className, ...input }: FieldProps & ComponentProps<'input'>) {
   return (
-    <Field label={label} hint={hint} error={error} labelHidden={labelHidden} className={className}>
+    <Field id={id} label={label} hint={hint} error={error} labelHidden={labelHidden} className={className}>
       {(wiring) => <input {...input} {...wiring} className={controlClass} />}
     </Field>
   );
 }
 
-export function TextArea({ label, hint, error, labelHidden, className, rows = 3, ...input }: FieldProps & ComponentProps<'textarea'>) {
+export function TextArea({ id, label, hint, error, labelHidden, className, rows = 3, ...input }: FieldProps & ComponentProps<'textarea'>) {
   return (
-    <Field label={label} hint={hint} error={error} labelHidden={labelHidden} className={className}>
+    <Field id={id} label={label} hint={hint} error={error} labelHidden={labelHidden} className={className}>
       {(wiring) => <textarea rows={rows} {...input} {...wiring} className={controlClass} />}
     </Field>
   );
 }
 
-export function SelectField({ label, hint, error, labelHidden, className, children, ...select }: FieldProps & ComponentProps<'select'>) {
+export function SelectField({ id, label, hint, error, labelHidden, className, children, ...select }: FieldProps & ComponentProps<'select'>) {
   return (
-    <Field label={label} hint={hint} error={error} labelHidden={labelHidden} className={className}>
+    <Field id={id} label={label} hint={hint} error={error} labelHidden={labelHidden} className={className}>
       {(wiring) => (
         <span className="relative grid">
           <select {...select} {...wiring} className={clsx(controlClass, 'appearance-none truncate pr-9')}>
@@ -68,8 +71,9 @@ export function SelectField({ label, hint, error, labelHidden, className, childr
   );
 }
 
-export function Checkbox({ label, hint, className, ...input }: { label: ReactNode; hint?: ReactNode } & ComponentProps<'input'>) {
-  const id = useId();
+export function Checkbox({ id: givenId, label, hint, className, ...input }: { label: ReactNode; hint?: ReactNode } & ComponentProps<'input'>) {
+  const madeId = useId();
+  const id = givenId ?? madeId;
   return (
     <div className={clsx('flex items-start gap-2.5', className)}>
       <input type="checkbox" id={id} {...input} className="mt-0.5 size-[18px] shrink-0 accent-[var(--indigo)]" />
