@@ -36,17 +36,20 @@ export function createRandom(seed: number): Random {
 
 /**
  * A seed for one strand of a computation (one basis, one repeat, ...), so that strands stay independent of each other's length.
- * The 32-bit finaliser of MurmurHash3 (Austin Appleby, public domain) over the seed and the strand's numbers.
+ * The 32-bit finaliser of MurmurHash3 (Austin Appleby, public domain) over the seed and then each number of the strand.
  */
 export function deriveSeed(seed: number, ...strand: number[]): number {
-  let hash = seed >>> 0;
-  for (const part of strand) {
-    hash = Math.imul(hash ^ (part + 0x9e3779b9), 0x85ebca6b);
-    hash ^= hash >>> 13;
-    hash = Math.imul(hash, 0xc2b2ae35);
-    hash ^= hash >>> 16;
-  }
+  let hash = finalise(seed ^ 0x9e3779b9);
+  // The multiplication between the rounds keeps (1, 2) and (2, 1) apart.
+  for (const part of strand) hash = finalise((Math.imul(hash, 0x01000193) + part + 1) | 0);
   return hash >>> 0;
+}
+
+function finalise(value: number): number {
+  let hash = value;
+  hash = Math.imul(hash ^ (hash >>> 16), 0x85ebca6b);
+  hash = Math.imul(hash ^ (hash >>> 13), 0xc2b2ae35);
+  return hash ^ (hash >>> 16);
 }
 
 /** Fisher-Yates shuffle in place. */
