@@ -1,9 +1,10 @@
 'use client';
 
-import { PageLinks } from '@/components/access/page-links';
 import { ImportRows } from '@/components/imports/import-rows';
 import { UploadZone } from '@/components/imports/upload-zone';
+import { Pagination } from '@/components/ui/pagination';
 import { EmptyState, Notice } from '@/components/ui/status';
+import { useAddress } from '@/components/ui/use-address';
 import { useImports } from '@/lib/api/hooks';
 import { type Page } from '@/lib/api/schemas';
 import { type ImportView } from '@/lib/api/types';
@@ -17,6 +18,7 @@ interface ImportListProps {
 /** Uploads and what became of them; looks again every second as long as something moves. */
 export function ImportList({ portfolioId, initial, mayUpload }: ImportListProps) {
   const { data = initial, error, mutate } = useImports(portfolioId, { page: initial.page, pageSize: initial.pageSize }, { fallbackData: initial });
+  const { href } = useAddress();
   return (
     <>
       {mayUpload && <UploadZone portfolioId={portfolioId} onArrived={mutate} />}
@@ -24,7 +26,7 @@ export function ImportList({ portfolioId, initial, mayUpload }: ImportListProps)
       {data.total > 0 ? (
         <>
           <ImportRows imports={data.items} />
-          <PageLinks path={`/portfolios/${portfolioId}/imports`} page={data.page} pageSize={data.pageSize} total={data.total} />
+          <Pagination page={data.page} pageSize={data.pageSize} total={data.total} hrefOf={({ page }) => href({ page: page === 1 ? null : page })} />
         </>
       ) : (
         <EmptyState title="Nothing was imported yet">

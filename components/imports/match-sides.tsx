@@ -31,15 +31,15 @@ function Value({ own, other, whole }: { own: string | null; other: string | null
 export function MatchSides({ match, leftIsNew }: { match: MatchView; leftIsNew: boolean }) {
   const { left, right } = match;
   const rows: Row[] = [
-    { label: 'Title', left: left.title, right: right.title, className: 'font-serif text-[16.5px] leading-[21px]' },
+    { label: 'Title', left: left.title, right: right.title, className: 'font-serif text-work' },
     { label: 'Authors', left: left.authors, right: right.authors },
     { label: 'Year', left: text(left.year), right: text(right.year), whole: true },
     { label: 'Venue', left: where(left), right: where(right) },
-    { label: 'DOI', left: left.doi, right: right.doi, whole: true, className: 'font-mono text-[13px] break-all' },
-    { label: 'References', left: formatNumber(left.references), right: formatNumber(right.references), className: 'text-[14px]', whole: true },
+    { label: 'DOI', left: left.doi, right: right.doi, whole: true, className: 'font-mono text-small break-all' },
+    { label: 'References', left: formatNumber(left.references), right: formatNumber(right.references), whole: true },
   ];
-  const head = 'pb-2 pr-3 text-left text-[13px] font-semibold text-ink-soft align-bottom';
-  const title = (side: MatchSide, isNew: boolean) => (isNew ? `In this file, line ${formatNumber(side.line)}` : <>From <span className="break-all">{placeOf(side)}</span></>);
+  const head = 'pb-2 pr-3 text-left text-small font-semibold text-ink-soft align-bottom';
+  const title = (side: MatchSide, isNew: boolean) => (isNew ? `In this file, line ${formatNumber(side.line)}` : <>{side.workId ? <><Link href={`/works/${side.workId}`}>Catalogued</Link>, from</> : 'From'} <span className="break-all">{placeOf(side)}</span></>);
   return (
     <table className="w-full table-fixed border-collapse">
       <caption className="sr-only">The two records side by side</caption>
@@ -47,16 +47,16 @@ export function MatchSides({ match, leftIsNew }: { match: MatchView; leftIsNew: 
         <tr>
           <th scope="col" className={`${head} hidden w-28 sm:table-cell`}><span className="sr-only">Field</span></th>
           <th scope="col" className={head}>{title(left, leftIsNew)}</th>
-          <th scope="col" className={head}>{right.workId ? <Link href={`/works/${right.workId}`}>Catalogued</Link> : null}{right.workId ? ', ' : ''}{title(right, false)}</th>
+          <th scope="col" className={head}>{title(right, false)}</th>
         </tr>
       </thead>
       <tbody>
         {rows.map(({ label, left: a, right: b, whole, className = '' }) => {
           const differs = whole && label !== 'References' && a !== null && b !== null && a !== b;
-          const cell = `border-t border-thread py-2 pr-3 align-top [overflow-wrap:anywhere] ${className} ${differs ? 'bg-weld-wash' : ''}`;
+          const cell = `border-t border-thread py-2 pr-3 align-top text-table [overflow-wrap:anywhere] ${className} ${differs ? 'bg-weld-wash' : ''}`;
           return (
             <tr key={label}>
-              <th scope="row" className="hidden border-t border-thread py-2 text-left align-top text-[13px] font-semibold text-ink-soft sm:table-cell">{label}{differs && <span className="sr-only">, differs</span>}</th>
+              <th scope="row" className="hidden border-t border-thread py-2 text-left align-top text-small font-semibold text-ink-soft sm:table-cell">{label}{differs && <span className="sr-only">, differs</span>}</th>
               <td className={cell}><Value own={a} other={b} whole={whole} /></td>
               <td className={cell}><Value own={b} other={a} whole={whole} /></td>
             </tr>

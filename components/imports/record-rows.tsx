@@ -2,6 +2,8 @@
 
 import Link from 'next/link';
 
+import { type DataColumn } from '@/components/tables/columns';
+import { DataTable } from '@/components/tables/data-table';
 import { formatNumber } from '@/components/ui/numbers';
 import { Pill, type Tone } from '@/components/ui/status';
 import { useAddress } from '@/components/ui/use-address';
@@ -11,44 +13,30 @@ const outcomes: Record<NonNullable<ImportRecordView['outcome']>, { words: string
   new: { words: 'new', tone: 'done' },
   known: { words: 'already catalogued', tone: 'done' },
   review: { words: 'to review', tone: 'caution' },
-  rejected: { words: 'rejected', tone: 'problem' },
+  rejected: { words: 'left out', tone: 'problem' },
 };
 
-const head = 'px-2 pb-2 text-[12.5px] font-semibold text-ink-soft first:pl-0 last:pr-0';
+const nameOf = (record: ImportRecordView) => record.title ?? record.key ?? 'No title';
 
 /** The records of an import in the order of the file; each opens to its raw text in the evidence panel. */
 export function RecordRows({ records, chosen }: { records: ImportRecordView[]; chosen: string | null }) {
-  const { href } = useAddress();
-  return (
-    <table className="w-full border-collapse text-[14.5px]">
-      <caption className="sr-only">Records of this file</caption>
-      <thead>
-        <tr className="border-b border-ink">
-          <th scope="col" className={`${head} hidden text-right sm:table-cell`}>Line</th>
-          <th scope="col" className={`${head} text-left max-sm:pl-0`}>Record</th>
-          <th scope="col" className={`${head} text-left`}>Outcome</th>
-          <th scope="col" className={`${head} hidden text-right sm:table-cell`}>References</th>
-        </tr>
-      </thead>
-      <tbody className="divide-y divide-thread">
-        {records.map((record) => {
-          const outcome = record.outcome && outcomes[record.outcome];
-          return (
-            <tr key={record.id} className={`align-baseline ${record.id === chosen ? 'bg-weld-wash' : 'hover:bg-paper'}`}>
-              <td className="hidden py-2.5 pr-2 text-right font-mono text-[12.5px] text-ink-soft sm:table-cell">{formatNumber(record.line)}</td>
-              <th scope="row" className="py-2.5 pr-2 text-left font-normal sm:pl-2">
-                <Link href={href({ record: record.id })} scroll={false} className="font-serif text-[16.5px] leading-[21px] text-ink no-underline [overflow-wrap:anywhere] hover:underline">{record.title ?? record.key ?? 'No title'}</Link>
-                <p className="text-[13px] leading-[18px] text-ink-soft">
-                  {[record.authors, record.year].filter((part) => part !== null).join(' · ')}
-                  {record.workId && <> <Link href={`/works/${record.workId}`} className="whitespace-nowrap">the work<span className="sr-only"> of {record.title ?? `the record at line ${record.line}`}</span></Link></>}
-                </p>
-              </th>
-              <td className="py-2.5 pl-2">{outcome ? <Pill tone={outcome.tone}>{outcome.words}</Pill> : '–'}</td>
-              <td className="hidden py-2.5 pl-2 text-right sm:table-cell">{formatNumber(record.references)}</td>
-            </tr>
-          );
-        })}
-      </tbody>
-    </table>
-  );
+  const { href, go } = useAddress();
+  const columns: DataColumn<ImportRecordView>[] = [
+    { id: 'line', head: 'Line', numeric: true, width: '4.5rem', cell: (record) => <span className="font-mono text-small text-ink-soft">{formatNumber(record.line)}</span> },
+    {
+      id: 'record',
+      head: 'Record',
+      narrow: 'title',
+      cell: (record) => (
+        <>
+          <Link href={href({ evidence: `record-${record.id}` })} scroll={false} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{nameOf(record)}</Link>
+          <span className="block text-small text-ink-soft">{[record.authors, record.year].filter((part) => part !== null).join(' · ')}</span>
+        </>
+      ),
+    },
+    { id: 'outcome', head: 'Outcome', width: '11rem', cell: (record) => (record.outcome ? <Pill tone={outcomes[record.outcome].tone}>{outcomes[record.outcome].words}</Pill> : '–') },
+    { id: 'references', head: 'References', numeric: true, width: '7rem', cell: (record) => formatNumber(record.references) },
+    { id: 'work', head: 'Work', width: '5rem', cell: (record) => (record.workId ? <Link href={`/works/${record.workId}`} aria-label={`The work of ${nameOf(record)}`}>open</Link> : '–') },
+  ];
+  return <DataTable caption="Records of this file" columns={columns} rows={records} rowKey={(record) => record.id} selectedKey={chosen} onOpen={(record) => go({ evidence: `record-${record.id}` })} />;
 }

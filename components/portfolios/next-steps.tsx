@@ -1,6 +1,7 @@
-import { Moment } from '@/components/access/moment';
 import { ButtonLink } from '@/components/ui/button';
+import { DateText } from '@/components/ui/date-text';
 import { count } from '@/components/ui/numbers';
+import { SectionHeading } from '@/components/ui/page-header';
 import { type PortfolioDetail } from '@/lib/api/types';
 
 interface Step {
@@ -32,13 +33,13 @@ export function NextSteps({ steps }: { steps: Step[] }) {
   if (steps.length === 0) return null;
   return (
     <section aria-labelledby="next-title">
-      <h2 id="next-title" className="border-b border-ink pb-2 text-[21px] leading-[25px]">What to do next</h2>
+      <SectionHeading id="next-title">What to do next</SectionHeading>
       <ul className="divide-y divide-thread border-b border-thread">
         {steps.map((step, index) => (
           <li key={step.title} className="flex flex-wrap items-center justify-between gap-x-6 gap-y-2 py-3">
             <div className="max-w-[38rem]">
               <p className="font-semibold">{step.title}</p>
-              <p className="text-[14px] text-ink-soft">{step.text}</p>
+              <p className="text-table text-ink-soft">{step.text}</p>
             </div>
             <ButtonLink href={step.href} kind={index === 0 ? 'primary' : 'secondary'}>{step.action}</ButtonLink>
           </li>
@@ -56,11 +57,11 @@ export function LatestAnalysis({ portfolio }: { portfolio: PortfolioDetail }) {
   const { summary } = analysis;
   return (
     <section aria-labelledby="analysis-title" className="grid gap-3">
-      <h2 id="analysis-title" className="border-b border-ink pb-2 text-[21px] leading-[25px]">Latest analysis</h2>
+      <SectionHeading id="analysis-title">Latest analysis</SectionHeading>
       {analysis.state === 'finished' && summary ? (
         <>
           <p>
-            <Moment at={analysis.finishedAt ?? analysis.createdAt} dateOnly />: {count(summary.works, 'work')} ({count(summary.cataloguedWorks, 'catalogued one')}) and {count(summary.citations, 'citation')} between them
+            <DateText at={analysis.finishedAt ?? analysis.createdAt} />: {count(summary.works, 'work')} ({count(summary.cataloguedWorks, 'catalogued one')}) and {count(summary.citations, 'citation')} between them
             {summary.bases.length > 0 && <>; {summary.bases.map((basis) => `${count(basis.clusters, 'cluster')} ${basisWords[basis.basis]}`).join(', ')}</>}.
           </p>
           <div className="flex flex-wrap gap-2">

@@ -36,19 +36,19 @@ export function PeopleField({ people, onChange, error }: PeopleFieldProps) {
   };
   return (
     <fieldset className="grid gap-2">
-      <legend className="mb-1 text-[13px] font-semibold">People</legend>
+      <legend className="mb-1 text-small font-semibold">People</legend>
       {people.length > 0 && (
         <ul className="divide-y divide-thread border-y border-thread">
           {people.map((person) => (
-            <li key={person.userId} className="flex flex-wrap items-center gap-x-3 gap-y-1 py-1.5 text-[14px]">
+            <li key={person.userId} className="flex flex-wrap items-center gap-x-3 gap-y-1 py-1.5 text-table">
               <span className="min-w-40 flex-1">
-                {person.name} <span className="text-[13px] text-ink-soft">{roleWords[person.role]}</span>
+                {person.name} <span className="text-small text-ink-soft">{roleWords[person.role]}</span>
               </span>
               <select
                 aria-label={`What ${person.name} may do`}
                 value={person.level}
                 onChange={(event) => onChange(people.map((one) => (one === person ? { ...one, level: event.target.value as GrantLevel } : one)))}
-                className="min-h-8 rounded-sm border border-thread-strong bg-paper px-2 text-[14px]"
+                className="min-h-8 rounded-sm border border-thread-strong bg-paper px-2 text-table"
               >
                 {grantLevels.map((level) => <option key={level} value={level}>{levelWords[level]}</option>)}
               </select>
@@ -65,13 +65,13 @@ export function PeopleField({ people, onChange, error }: PeopleFieldProps) {
       <ul id={listId} aria-label="People found" aria-live="polite" className="grid gap-px">
         {offered.map((person) => (
           <li key={person.id}>
-            <button type="button" onClick={() => add(person)} className="w-full rounded-sm px-2 py-1.5 text-left text-[14px] hover:bg-weld-wash">
-              {person.name} <span className="text-[13px] text-ink-soft">{person.email}, {roleWords[person.role]}</span>
+            <button type="button" onClick={() => add(person)} className="w-full rounded-sm px-2 py-1.5 text-left text-table hover:bg-weld-wash">
+              {person.name} <span className="text-small text-ink-soft">{person.email}, {roleWords[person.role]}</span>
             </button>
           </li>
         ))}
-        {q.length >= 2 && found.data && offered.length === 0 && <li className="px-2 py-1 text-[13px] text-ink-soft">Nobody else is called that. An administrator can invite people.</li>}
-        {found.error && q.length >= 2 && <li className="px-2 py-1 text-[13px] text-madder">{found.error.message}</li>}
+        {q.length >= 2 && found.data && offered.length === 0 && <li className="px-2 py-1 text-small text-ink-soft">Nobody else is called that. An administrator can invite people.</li>}
+        {found.error && q.length >= 2 && <li className="px-2 py-1 text-small text-madder">{found.error.message}</li>}
       </ul>
     </fieldset>
   );

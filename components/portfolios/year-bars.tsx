@@ -17,7 +17,7 @@ export function YearBars({ years, undated }: { years: { year: number; works: num
   const slot = 100 / all.length;
   return (
     <figure className="grid gap-2">
-      <figcaption className="text-[14px] font-semibold">{finding(years)}</figcaption>
+      <figcaption className="text-table font-semibold">{finding(years)}</figcaption>
       <svg viewBox="0 0 100 30" preserveAspectRatio="none" className="h-32 w-full" aria-hidden="true">
         {all.map(({ year, works }, index) => {
           const height = (works / highest) * 29;
@@ -28,11 +28,11 @@ export function YearBars({ years, undated }: { years: { year: number; works: num
           );
         })}
       </svg>
-      <div aria-hidden="true" className="flex justify-between border-t border-thread-strong pt-1 text-[13px] text-ink-soft">
+      <div aria-hidden="true" className="flex justify-between border-t border-thread-strong pt-1 text-small text-ink-soft">
         <span>{first}</span>
         {last > first && <span>{last}</span>}
       </div>
-      <details className="text-[13px] text-ink-soft">
+      <details className="text-small text-ink-soft">
         <summary className="w-fit text-indigo underline underline-offset-2">The numbers as a table</summary>
         <table className="mt-2 border-collapse">
           <caption className="sr-only">Works by year of publication</caption>
@@ -47,7 +47,7 @@ export function YearBars({ years, undated }: { years: { year: number; works: num
           </tbody>
         </table>
       </details>
-      {undated > 0 && <p className="text-[13px] text-ink-soft">{count(undated, 'work')} without a year {undated === 1 ? 'is' : 'are'} not drawn.</p>}
+      {undated > 0 && <p className="text-small text-ink-soft">{count(undated, 'work')} without a year {undated === 1 ? 'is' : 'are'} not drawn.</p>}
     </figure>
   );
 }

@@ -11,12 +11,12 @@ interface WorkLineProps {
 export function WorkLine({ work }: WorkLineProps) {
   return (
     <div className="min-w-0">
-      <Link href={`/works/${work.id}`} className="font-serif text-[16.5px] leading-[21px] text-ink no-underline [overflow-wrap:anywhere] hover:underline">{titleOf(work)}</Link>
+      <Link href={`/works/${work.id}`} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{titleOf(work)}</Link>
       <span className="ml-2 inline-flex gap-1.5 align-middle">
         {work.retracted && <Pill tone="problem">retracted</Pill>}
         {!work.catalogued && <Pill>cited only</Pill>}
       </span>
-      <p className="text-[13px] leading-[18px] text-ink-soft">{[work.title === null ? null : work.authors, work.title === null ? null : work.year, work.venue].filter((part) => part !== null && part !== undefined).join(' · ')}</p>
+      <p className="text-small text-ink-soft">{[work.title === null ? null : work.authors, work.title === null ? null : work.year, work.venue].filter((part) => part !== null && part !== undefined).join(' · ')}</p>
     </div>
   );
 }

@@ -11,7 +11,7 @@ function SourceLine({ text, doi }: { text: string; doi?: string }) {
       {text}
       {doi && (
         <>
-          . <a href={`https://doi.org/${doi}`} className="font-mono text-[12.5px] break-all" rel="external noreferrer">{doi}</a>
+          . <a href={`https://doi.org/${doi}`} className="font-mono text-head break-all" rel="external noreferrer">{doi}</a>
         </>
       )}
     </li>
@@ -22,40 +22,40 @@ function SourceLine({ text, doi }: { text: string; doi?: string }) {
 export default async function MethodsPage() {
   await actorForPage();
   return (
-    <div className="grid max-w-[74rem] gap-10 px-4 py-6 sm:px-7 lg:grid-cols-[minmax(0,1fr)_15rem]">
+    <div className="grid max-w-[74rem] gap-10 px-4 pt-6 pb-12 md:px-7 lg:grid-cols-[minmax(0,1fr)_15rem]">
       <div className="grid gap-10">
         <header className="grid max-w-[44rem] gap-2">
-          <h1 className="text-[31px] leading-[35px]">Methods and cautions</h1>
+          <h1 className="text-title">Methods and cautions</h1>
           <p className="text-ink-soft">What each figure means, where it misleads, and where the method comes from. Every analysis also names its own parameters, seed and fingerprints.</p>
         </header>
         <section id="cautions" aria-labelledby="cautions-title" className="grid scroll-mt-6 gap-4">
-          <h2 id="cautions-title" className="text-[21px] leading-[25px]">Cautions</h2>
+          <h2 id="cautions-title" className="text-panel">Cautions</h2>
           <dl className="grid max-w-[52rem] gap-x-8 gap-y-4 border-l-[3px] border-weld pl-4 sm:grid-cols-2">
             {cautions.map(({ title, text }) => (
               <div key={title}>
                 <dt className="font-semibold">{title}</dt>
-                <dd className="text-[14.5px] text-ink-soft">{text}</dd>
+                <dd className="text-table text-ink-soft">{text}</dd>
               </div>
             ))}
           </dl>
-          <div className="max-w-[44rem] text-[14px] text-ink-soft">
+          <div className="max-w-[44rem] text-table text-ink-soft">
             <p>Institutions follow their own policy and their national rules. These say why figures of this kind need care:</p>
             <ul className="mt-1 list-disc pl-5">{agreements.map((source) => <SourceLine key={source.text} {...source} />)}</ul>
           </div>
         </section>
         {definitions.map(({ heading, entries }) => (
           <section key={heading} aria-label={heading} className="grid gap-1">
-            <h2 className="border-b border-ink pb-2 text-[21px] leading-[25px]">{heading}</h2>
+            <h2 className="border-b border-ink pb-2 text-panel">{heading}</h2>
             {entries.map((entry) => (
               <article key={entry.id} id={entry.id} aria-labelledby={`${entry.id}-name`} className="grid scroll-mt-6 gap-x-8 gap-y-2 border-b border-thread py-5 target:bg-weld-wash md:grid-cols-[12rem_minmax(0,1fr)]">
-                <h3 id={`${entry.id}-name`} className="text-[16.5px] leading-[21px]">
+                <h3 id={`${entry.id}-name`} className="text-work">
                   <a href={`#${entry.id}`} className="text-ink no-underline hover:underline">{entry.name}</a>
                 </h3>
                 <div className="grid max-w-[44rem] gap-2">
                   <p>{entry.definition}</p>
-                  {entry.formula && <p className="font-mono text-[12.5px] leading-[20px] text-ink-soft">{entry.formula}</p>}
-                  <p className="text-[14px] text-ink-soft"><span className="font-semibold text-weld-ink">Where it misleads.</span> {entry.misleads}</p>
-                  {entry.sources.length > 0 && <ul aria-label={`Sources of ${entry.name}`} className="text-[13px] text-ink-soft">{entry.sources.map((source) => <SourceLine key={source.text} {...source} />)}</ul>}
+                  {entry.formula && <p className="font-mono text-head leading-[1.125rem] text-ink-soft">{entry.formula}</p>}
+                  <p className="text-table text-ink-soft"><span className="font-semibold text-weld-ink">Where it misleads.</span> {entry.misleads}</p>
+                  {entry.sources.length > 0 && <ul aria-label={`Sources of ${entry.name}`} className="text-small text-ink-soft">{entry.sources.map((source) => <SourceLine key={source.text} {...source} />)}</ul>}
                 </div>
               </article>
             ))}
@@ -63,7 +63,7 @@ export default async function MethodsPage() {
         ))}
       </div>
       <nav aria-label="On this page" className="hidden lg:block">
-        <ul className="sticky top-6 grid gap-1 border-l border-thread pl-4 text-[14px]">
+        <ul className="sticky top-6 grid gap-1 border-l border-thread pl-4 text-table">
           <li><a href="#cautions">Cautions</a></li>
           {definitions.flatMap(({ entries }) => entries).map((entry) => <li key={entry.id}><a href={`#${entry.id}`}>{entry.name}</a></li>)}
         </ul>

@@ -5,6 +5,7 @@ import { SearchForm } from '@/components/access/search-form';
 import { DeletedNotice } from '@/components/portfolios/deleted-notice';
 import { NewPortfolio } from '@/components/portfolios/new-portfolio';
 import { PortfolioList } from '@/components/portfolios/portfolio-list';
+import { PageHeader } from '@/components/ui/page-header';
 import { EmptyState } from '@/components/ui/status';
 import { actorForPage } from '@/lib/access/actor';
 import { roleMay } from '@/lib/access/permissions';
@@ -23,12 +24,9 @@ export default async function PortfoliosPage({ searchParams }: { searchParams: P
   const mayCreate = roleMay(actor.role, 'portfolio.create');
   const units = mayCreate ? await unitTree() : [];
   return (
-    <div className="grid gap-5 px-4 py-6 sm:px-7">
+    <div className="grid gap-5 px-4 pt-6 pb-12 md:px-7">
       {gone && <DeletedNotice portfolioId={gone.id} name={gone.name} />}
-      <header className="flex flex-wrap items-end justify-between gap-4">
-        <h1 className="text-[31px] leading-[35px]">Portfolios</h1>
-        {mayCreate && list.total > 0 && <NewPortfolio units={units} />}
-      </header>
+      <PageHeader title="Portfolios" actions={mayCreate && list.total > 0 && <NewPortfolio units={units} />} />
       {(list.total > 0 || query.q) && <SearchForm label="Find a portfolio by name or purpose" q={query.q} />}
       {list.total > 0 ? (
         <>

@@ -2,7 +2,9 @@ import { notFound } from 'next/navigation';
 import { cache } from 'react';
 
 import { actorForPage } from '@/lib/access/actor';
+import { queryOfPage } from '@/lib/api/page-query';
 import { listCiting, listReferences } from '@/lib/catalogue/reading/citations';
+import { listWorks, worksQuery } from '@/lib/catalogue/reading/list-works';
 import { loadWork } from '@/lib/catalogue/reading/visibility';
 import { readWork } from '@/lib/catalogue/reading/work-detail';
 import { idOfPage } from '@/lib/portfolios/page';
@@ -28,4 +30,9 @@ export async function readWorkPage(workId: string, search: { references?: unknow
     listCiting(actor, row.id, { page: pageNumber(search.citing), pageSize }),
   ]);
   return { work, references, citing };
+}
+
+/** The list that the works page first shows, by its address. */
+export async function readWorksPage(portfolioId: number, search: Record<string, string | string[] | undefined>) {
+  return listWorks(portfolioId, queryOfPage(worksQuery, search));
 }

@@ -1,7 +1,8 @@
 import { type Metadata } from 'next';
 import { type ReactNode } from 'react';
 
-import { SectionLinks } from '@/components/access/section-links';
+import { Place } from '@/components/frame/place';
+import { SectionRow } from '@/components/frame/section-row';
 import { portfolioForPage } from '@/lib/portfolios/page';
 
 interface LayoutProps {
@@ -21,7 +22,8 @@ export default async function PortfolioLayout({ params, children }: LayoutProps)
   const { row } = await portfolioForPage((await params).portfolioId);
   return (
     <>
-      <SectionLinks label={row.name} sections={sections.map(([path, label]) => ({ href: `/portfolios/${row.id}${path}`, label }))} />
+      <Place items={[{ label: 'Portfolios', href: '/portfolios' }, { label: row.name }]} />
+      <SectionRow label={row.name} items={sections.map(([path, label]) => ({ href: `/portfolios/${row.id}${path}`, label }))} />
       {children}
     </>
   );
