@@ -290,7 +290,7 @@ export interface EvidenceView {
   /** Rows of "how it is counted". */
   counted: { label: string; value: string }[];
   /** Where the references behind it were read; the first ones and how many in all. */
-  places: { importId: string; fileName: string; line: number; raw: string; citingWorkId: string; citingTitle: string | null }[];
+  places: { importId: string; portfolioId: string; fileName: string; line: number; raw: string; citingWorkId: string; citingTitle: string | null }[];
   placesTotal: number;
   /** References in files of portfolios that the person was not given. */
   placesHidden: number;

@@ -77,15 +77,15 @@ export async function readPlaces(actor: Actor, subject: Subject, paging: { page:
   const all = { ...replacements, ...visible.replacements, limit: paging.pageSize, offset: (paging.page - 1) * paging.pageSize };
   const [[counts], rows] = await Promise.all([
     select<{ total: number; seen: number }>(null, `SELECT COUNT(*) AS total, COALESCE(SUM(import.portfolioId IN (${visible.sql})), 0) AS seen ${sql}`, all),
-    select<{ importId: number; fileName: string; line: number; raw: string; workId: number; title: string | null }>(
+    select<{ importId: number; portfolioId: number; fileName: string; line: number; raw: string; workId: number; title: string | null }>(
       null,
-      `SELECT import.id AS importId, import.fileName, reference.line, reference.raw, citing.workId, citing.title ${sql} AND import.portfolioId IN (${visible.sql})
+      `SELECT import.id AS importId, import.portfolioId, import.fileName, reference.line, reference.raw, citing.workId, citing.title ${sql} AND import.portfolioId IN (${visible.sql})
        ORDER BY import.id, reference.line, reference.recordId, reference.position LIMIT :limit OFFSET :offset`,
       all,
     ),
   ]);
   return {
-    places: rows.map((row) => ({ importId: String(row.importId), fileName: row.fileName, line: row.line, raw: row.raw, citingWorkId: String(row.workId), citingTitle: row.title })),
+    places: rows.map((row) => ({ importId: String(row.importId), portfolioId: String(row.portfolioId), fileName: row.fileName, line: row.line, raw: row.raw, citingWorkId: String(row.workId), citingTitle: row.title })),
     placesTotal: Number(counts.seen),
     placesHidden: Number(counts.total) - Number(counts.seen),
   };
