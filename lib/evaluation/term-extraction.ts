@@ -31,8 +31,8 @@ const longestText = 2_000;
 const mostKeywords = 100;
 
 /**
- * Finds the candidate terms of works: runs of one to three words in titles and keywords, not across punctuation, neither starting nor ending with
- * a stop word. A run of numbers or of single letters is no term. Each work counts a term once. Terms in fewer than three works are dropped.
+ * Finds the candidate terms of works: runs of one to three words in titles and keywords, across neither punctuation nor a
+ * stop word. A run of numbers or of single letters is no term. Each work counts a term once. Terms in fewer than three works are dropped.
  * Readable form: words as they are most often spelt, lower-case unless capitals belong to the word ("DNA", "Wadden Sea").
  * Cost O(total words). Works without words have no terms. Terms are numbered in the order in which they are first met.
  */
@@ -106,8 +106,9 @@ function eachTerm(words: Word[], visit: (form: string) => void): void {
     let form = '';
     for (let length = 1; length <= longestTerm && start + length <= words.length; length += 1) {
       const last = words[start + length - 1];
+      if (last.stops) break;
       form = length === 1 ? last.form : `${form} ${last.form}`;
-      if (!last.stops && isTerm(form)) visit(form);
+      if (isTerm(form)) visit(form);
     }
   }
 }

@@ -8,7 +8,7 @@ import labels from '@/tests/fixtures/checks/labels.json';
 const likelihoodOf = ([inWith, inWithout, outWith, outWithout]: number[]): number => signedLogLikelihood({ inWith, inWithout, outWith, outWithout });
 
 describe('signed log-likelihood (labels.json)', () => {
-  it.each(labels.dunning_bigrams.map((row) => [row.bigram, row] as const))('gives scipy's value for "%s", and the one printed by Dunning (1993) where there is one', (_bigram, row) => {
+  it.each(labels.dunning_bigrams.map((row) => [row.bigram, row] as const))('gives the value of scipy for "%s", and the one printed by Dunning (1993) where there is one', (_bigram, row) => {
     if (row.printed !== null) expect(Math.abs(likelihoodOf(row.k) - row.printed)).toBeLessThan(0.006);
     expect(likelihoodOf(row.k)).toBeCloseTo(row.signed, 8);
   });
