@@ -53,7 +53,7 @@ export function DistributionStrip({ bins, title, axis, unit = 'works', mark, for
           })}
         </svg>
       </div>
-      <div aria-hidden="true" className="flex justify-between gap-4 border-t border-thread-strong pt-1 text-small text-ink-soft">
+      <div aria-hidden="true" className="-mt-1.5 flex justify-between gap-4 border-t border-thread-strong pt-1 text-small text-ink-soft">
         <span>{format(first.from)}</span>
         <span>{axis}</span>
         <span>{format(last.to)}</span>

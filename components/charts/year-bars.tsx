@@ -53,7 +53,7 @@ export function YearBars({ values, title, unit = ['work', 'works'], compact = fa
           })}
         </svg>
       </div>
-      <div aria-hidden="true" className="flex justify-between border-t border-thread-strong pt-1 text-table text-ink-soft">
+      <div aria-hidden="true" className="-mt-1.5 flex justify-between border-t border-thread-strong pt-1 text-table text-ink-soft">
         <span>{first}</span>
         {last > first && <span>{last}</span>}
       </div>

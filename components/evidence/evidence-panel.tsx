@@ -54,7 +54,7 @@ function Body({ loading, problem, onRetry, children }: Pick<EvidencePanelProps, 
 
 /** The panel behind a figure: at the right of the sheet, or from below on narrow screens. Escape closes it and gives the focus back. */
 export function EvidencePanel({ panelKey, eyebrow = 'Evidence for', title, subject, facts, onClose, ...body }: EvidencePanelProps) {
-  const { go } = useAddress();
+  const { show } = useAddress();
   const titleId = useId();
   const heading = useRef<HTMLHeadingElement>(null);
   const opener = useRef<HTMLElement | null>(null);
@@ -73,7 +73,7 @@ export function EvidencePanel({ panelKey, eyebrow = 'Evidence for', title, subje
 
   const close = () => {
     if (onClose) onClose();
-    else go({ evidence: null });
+    else show({ evidence: null });
     if (opener.current?.isConnected) opener.current.focus({ preventScroll: true });
   };
   useKeys({ Escape: close });

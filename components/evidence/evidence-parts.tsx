@@ -44,15 +44,11 @@ export function FileLines({ lines, more }: { lines: readonly FileLine[]; more?: 
     <div className="grid gap-1">
       <ul className="grid gap-1 font-mono text-[0.78125rem] leading-[1.125rem] text-ink-soft">
         {lines.map((line, index) => {
-          const place = (
-            <>
-              <span className="[overflow-wrap:anywhere]">{line.file}</span> <span className="ml-1.5 whitespace-nowrap">line {groupedLine(line.line)}</span>
-            </>
-          );
+          const place = `${line.file}\u00a0\u00a0line\u00a0${groupedLine(line.line)}`;
           return (
-            <li key={`${line.file} ${line.line} ${index}`}>
+            <li key={`${line.file} ${line.line} ${index}`} className="[overflow-wrap:anywhere]">
               {line.href ? <Link href={line.href} scroll={false}>{place}</Link> : place}
-              {line.text && <span className="mt-0.5 block border-l-2 border-thread pl-2 text-ink [overflow-wrap:anywhere]">{line.text}</span>}
+              {line.text && <span className="mt-0.5 block border-l-2 border-thread pl-2 text-ink">{line.text}</span>}
             </li>
           );
         })}

@@ -21,10 +21,10 @@ interface OptionProps {
 function Option({ hit, id, active, serif, onPick }: OptionProps) {
   return (
     // The input keeps the focus and its keys reach the options through aria-activedescendant.
-    <li id={id} role="option" aria-selected={active} onPointerDown={(event) => event.preventDefault()} onClick={onPick} className={clsx('cursor-pointer px-3 py-1.5', active ? 'bg-weld-wash' : 'hover:bg-linen')}>
+    <div id={id} role="option" aria-selected={active} onPointerDown={(event) => event.preventDefault()} onClick={onPick} className={clsx('cursor-pointer px-3 py-1.5', active ? 'bg-weld-wash' : 'hover:bg-linen')}>
       <span className={clsx('block truncate', serif ? 'font-serif text-work' : 'text-table')}>{hit.title}</span>
       {hit.subtitle && <span className="block truncate text-small text-ink-soft">{hit.subtitle}</span>}
-    </li>
+    </div>
   );
 }
 
@@ -99,21 +99,19 @@ export function SearchBox({ search = searchCatalogue, className }: { search?: Se
       />
       <Icon name="search" className="pointer-events-none absolute top-1/2 right-3 -translate-y-1/2 text-ink-soft" />
       <div className={clsx('absolute top-full right-0 left-0 z-40 mt-1.5 max-h-[70dvh] overflow-y-auto rounded-sm border border-thread bg-paper py-1 shadow-float md:left-auto md:w-[26rem]', !shown && 'hidden')}>
-        <ul id={`${id}-list`} role="listbox" aria-label="Found">
+        <div id={`${id}-list`} role="listbox" aria-label="Found">
           {groups.map((group, groupIndex) => {
             const before = groups.slice(0, groupIndex).reduce((sum, one) => sum + one.items.length, 0);
             return (
-              <li key={group.title} role="group" aria-label={group.title}>
+              <div key={group.title} role="group" aria-label={group.title}>
                 <p aria-hidden="true" className="px-3 pt-2 pb-1 text-head font-semibold text-ink-soft">{group.title}</p>
-                <ul role="presentation">
-                  {group.items.map((hit, index) => (
-                    <Option key={hit.id} hit={hit} id={optionId(before + index)} active={active === before + index} serif={group.serif} onPick={() => pick(hit)} />
-                  ))}
-                </ul>
-              </li>
+                {group.items.map((hit, index) => (
+                  <Option key={hit.id} hit={hit} id={optionId(before + index)} active={active === before + index} serif={group.serif} onPick={() => pick(hit)} />
+                ))}
+              </div>
             );
           })}
-        </ul>
+        </div>
         {all.length === 0 && <p className="px-3 py-2 text-table text-ink-soft">{problem ?? `Nothing found for “${query}” among what you were given.`}</p>}
       </div>
       <p role="status" className="sr-only">{said}</p>

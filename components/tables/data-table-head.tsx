@@ -5,12 +5,14 @@ import { Icon } from '@/components/ui/icons';
 
 interface DataTableHeadProps<Row> {
   columns: readonly DataColumn<Row>[];
+  /** The column that names the rows: without a width of its own it has the largest, so that rows on their way and rows that came stand alike. */
+  titleId: string | undefined;
   sort: string;
   onSort?: (sort: string) => void;
 }
 
 /** The head of a DataTable: stays in view, sorts by its buttons. Its rule is a shadow, since borders of sticky cells scroll away. */
-export function DataTableHead<Row>({ columns, sort, onSort }: DataTableHeadProps<Row>) {
+export function DataTableHead<Row>({ columns, titleId, sort, onSort }: DataTableHeadProps<Row>) {
   return (
     <thead role="rowgroup" className="max-md:hidden">
       <tr role="row">
@@ -23,7 +25,7 @@ export function DataTableHead<Row>({ columns, sort, onSort }: DataTableHeadProps
               scope="col"
               role="columnheader"
               aria-sort={column.sort && onSort ? (direction ?? 'none') : undefined}
-              style={{ width: column.width }}
+              style={{ width: column.width ?? (column.id === titleId ? '42%' : undefined) }}
               className={clsx('sticky top-0 z-10 bg-linen px-1.5 pt-2 pb-2.5 align-bottom shadow-[inset_0_-1px_var(--ink)] first:pl-0 last:pr-1.5', column.numeric ? 'text-right' : 'text-left')}
             >
               {column.sort && onSort ? (

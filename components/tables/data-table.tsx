@@ -40,11 +40,12 @@ interface DataTableProps<Row> {
   actions?: ReactNode;
 }
 
+/** Where a cell stands in a stacked row: a grid of two columns, with one more at the left where there is a lead. */
 const places = {
   lead: 'max-md:col-start-1 max-md:row-start-1 max-md:row-end-[span_20]',
-  title: 'max-md:col-span-2 max-md:col-start-2',
-  pair: 'max-md:col-span-1',
-  wide: 'max-md:col-span-2 max-md:col-start-2',
+  title: 'max-md:col-span-2 max-md:pb-1',
+  pair: 'max-md:pt-1.5',
+  wide: 'max-md:col-span-2 max-md:pt-1.5',
   hidden: 'max-md:hidden',
 };
 
@@ -78,15 +79,15 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
   const { box, overflows } = useOverflow<HTMLDivElement>();
   const sortable = columns.filter((column) => column.sort && visible[column.id] !== false);
   const rowLook = clsx(
-    'border-b border-thread max-md:grid max-md:gap-x-4 max-md:gap-y-2 max-md:py-3.5',
-    lead ? 'max-md:grid-cols-[1.75rem_minmax(0,1fr)_minmax(0,1fr)]' : 'max-md:grid-cols-[0_minmax(0,1fr)_minmax(0,1fr)] max-md:[&>*]:first:col-start-2',
+    'border-b border-thread max-md:grid max-md:gap-x-3 max-md:py-3',
+    lead ? 'max-md:grid-cols-[1.75rem_minmax(0,1fr)_minmax(0,1fr)]' : 'max-md:grid-cols-2',
   );
 
   return (
     <div className="grid min-w-0 gap-3">
       {(filters || actions || name) && (
         <div className="flex flex-wrap items-end justify-between gap-x-4 gap-y-2">
-          <div className="flex min-w-0 flex-1 flex-wrap items-end gap-2">{filters}</div>
+          <div className="flex min-w-0 flex-1 flex-wrap items-end gap-2 max-md:basis-full">{filters}</div>
           <div className="flex flex-wrap gap-2">
             {name && <ColumnChooser columns={columns} shown={visible} onChange={choose} />}
             {actions}
@@ -101,7 +102,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
           {/* The roles are said outright: laid out as stacked rows, browsers would drop them. */}
           <table role="table" aria-busy={loading || undefined} className="w-full border-collapse text-table max-md:block">
             <caption className="sr-only">{caption}</caption>
-            <DataTableHead columns={shown} sort={sort} onSort={onSort} />
+            <DataTableHead columns={shown} titleId={titleId} sort={sort} onSort={onSort} />
             <tbody role="rowgroup" className={clsx('max-md:block', loading && rows.length > 0 && 'opacity-60 transition-opacity')}>
               {table.getRowModel().rows.map((row) => (
                 <tr
@@ -126,7 +127,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
                       <Cell
                         key={cell.id}
                         {...(Cell === 'th' ? { scope: 'row', role: 'rowheader' } : { role: 'cell' })}
-                        className={clsx('px-1.5 py-2.5 align-middle font-normal first:pl-0 last:pr-1.5 max-md:p-0 max-md:text-left', column.numeric ? 'text-right' : 'text-left', column.numeric && 'md:whitespace-nowrap', places[place])}
+                        className={clsx('px-1.5 py-2.5 align-middle font-normal first:pl-0 last:pr-1.5 max-md:px-0 max-md:py-0 max-md:text-left', column.numeric ? 'text-right' : 'text-left', column.numeric && 'md:whitespace-nowrap', places[place])}
                       >
                         {(place === 'pair' || place === 'wide') && <span className="block text-head text-ink-soft md:hidden">{labelOf(column)}</span>}
                         {flexRender(cell.column.columnDef.cell, cell.getContext())}

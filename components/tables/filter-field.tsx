@@ -43,7 +43,7 @@ export function FilterField({ label, placeholder = label, value, onChange, class
         if (timer.current) clearTimeout(timer.current);
         timer.current = setTimeout(() => onChange(text.trim()), pauseMs);
       }}
-      className={clsx(controlClass, 'text-table', className)}
+      className={clsx(controlClass, 'min-w-48 flex-1 text-table md:max-w-[18rem]', className)}
     />
   );
 }

@@ -10,6 +10,8 @@ interface AddressDefaults<Filter extends string> {
   pageSize?: number;
   /** Names of the filters in the address; one that is absent reads ''. */
   filters?: readonly Filter[];
+  /** The server draws the rows: every change asks it for the page. Otherwise the browser reads them, and the change is at once. */
+  fromServer?: boolean;
 }
 
 export interface AddressChange<Filter extends string> {
@@ -31,8 +33,8 @@ function wholeFrom(text: string | null, otherwise: number, largest = Number.MAX_
  * The state of a list in the address: `?sort=&page=&pageSize=` and the filters by name. A new order, size or filter goes back to page 1;
  * what equals its default is left out, so that one view has one address. `query` is what the API takes.
  */
-export function useAddressState<Filter extends string = never>({ sort: firstSort = '', pageSize: firstSize = 50, filters: names }: AddressDefaults<Filter> = {}) {
-  const { search, href, go } = useAddress();
+export function useAddressState<Filter extends string = never>({ sort: firstSort = '', pageSize: firstSize = 50, filters: names, fromServer = false }: AddressDefaults<Filter> = {}) {
+  const { search, href, go, show } = useAddress();
   const sort = search.get('sort') ?? firstSort;
   const page = wholeFrom(search.get('page'), 1);
   const pageSize = wholeFrom(search.get('pageSize'), firstSize, largestPage);

@@ -11,11 +11,10 @@ export function Menu({ trigger, label, children, align = 'end' }: { trigger: Rea
   return (
     <DropdownMenu.Root modal={false}>
       <DropdownMenu.Trigger asChild>{trigger}</DropdownMenu.Trigger>
-      <DropdownMenu.Portal>
-        <DropdownMenu.Content align={align} sideOffset={6} aria-label={label} className="z-50 min-w-44 rounded-sm border border-thread bg-paper py-1 shadow-float">
-          {children}
-        </DropdownMenu.Content>
-      </DropdownMenu.Portal>
+      {/* Where its button stands, not at the end of the page: within a landmark, and next for Tab. */}
+      <DropdownMenu.Content align={align} sideOffset={6} collisionPadding={8} aria-label={label} className="z-50 max-h-[80dvh] min-w-44 overflow-y-auto rounded-sm border border-thread bg-paper py-1 font-sans font-normal shadow-float">
+        {children}
+      </DropdownMenu.Content>
     </DropdownMenu.Root>
   );
 }

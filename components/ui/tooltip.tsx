@@ -9,11 +9,9 @@ export function Tooltip({ text, children }: { text: string; children: ReactNode 
     <Headless.Provider delayDuration={350}>
       <Headless.Root>
         <Headless.Trigger asChild>{children}</Headless.Trigger>
-        <Headless.Portal>
-          <Headless.Content sideOffset={6} collisionPadding={8} className="z-50 max-w-64 rounded-xs bg-ink px-2.5 py-1.5 text-small text-paper shadow-float">
-            {text}
-          </Headless.Content>
-        </Headless.Portal>
+        <Headless.Content sideOffset={6} collisionPadding={8} className="z-50 max-w-64 rounded-xs bg-ink px-2.5 py-1.5 text-small text-paper shadow-float">
+          {text}
+        </Headless.Content>
       </Headless.Root>
     </Headless.Provider>
   );

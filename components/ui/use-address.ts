@@ -24,5 +24,14 @@ export function useAddress() {
   const href = useCallback((changes: Changes) => `${path}${changedQuery(search, changes)}`, [path, search]);
   /** `push` for what people would go back from; `replace` for what follows every keystroke. */
   const go = useCallback((changes: Changes, how: 'push' | 'replace' = 'push') => router[how](href(changes), { scroll: false }), [router, href]);
-  return { search, href, go };
+  /** As `go`, but asks the server for no new page: for what the browser reads itself. Several changes may follow each other before the page is drawn again. */
+  const show = useCallback(
+    (changes: Changes, how: 'push' | 'replace' = 'push') => {
+      const next = `${path}${changedQuery(new URLSearchParams(window.location.search), changes)}`;
+      if (how === 'push') window.history.pushState(null, '', next);
+      else window.history.replaceState(null, '', next);
+    },
+    [path],
+  );
+  return { search, href, go, show };
 }

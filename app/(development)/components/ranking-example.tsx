@@ -41,7 +41,7 @@ const columns: DataColumn<ExampleWork>[] = [
 ];
 
 export function RankingExample() {
-  const { search, go } = useAddress();
+  const { search, show } = useAddress();
   const { sort, page, pageSize, filters, hrefOf, set } = useAddressState({ sort: '-pageRank', pageSize: 50, filters: ['q'] });
   const found = exampleWorks.filter((work) => work.title.toLowerCase().includes(filters.q.toLowerCase()));
   const state = search.get('state');
@@ -60,10 +60,10 @@ export function RankingExample() {
         sort={sort}
         onSort={(next) => set({ sort: next })}
         selectedKey={search.get('evidence')}
-        onOpen={(work) => go({ evidence: work.id })}
+        onOpen={(work) => show({ evidence: work.id })}
         filters={
           <>
-            <FilterField label="Filter by title, author or venue" value={filters.q} onChange={(q) => set({ filters: { q } }, 'replace')} className="max-w-[18rem]" />
+            <FilterField label="Filter by title, author or venue" value={filters.q} onChange={(q) => set({ filters: { q } }, 'replace')} />
             <SelectField label="Cluster" labelHidden className="w-36">
               <option>All clusters</option>
               <option>A Peat carbon under drainage</option>
