@@ -2,90 +2,147 @@
  * Cited references as lines: "AUTHOR II, YEAR, ABBREVIATED SOURCE, Vvol, Ppage, DOI 10.x/y".
  * Author and year are taken from the left, the rest is told apart by pattern; anything may be missing. Common practice, no standard.
  */
-import { findDoi, normaliseDoi } from '@/lib/bibliography/identifiers';
+import { findDoi, normaliseArxiv, normaliseDoi, normalisePmid } from '@/lib/bibliography/identifiers';
+import { parseListedName } from '@/lib/bibliography/names';
 import { findYear } from '@/lib/bibliography/normalise';
+import { tidyText } from '@/lib/bibliography/plain-text';
 import { type CitedReference } from '@/lib/bibliography/record';
 
-const anonymous = /^\[?anonymous\]?$|^\*?anon\.?$/i;
+/** A line longer than this is cut: a reference is a line, not a chapter. */
+export const longestReference = 10_000;
+const anonymous = /^[[*]?anon(?:ymous)?\.?\]?$/i;
+const yearPart = /^\(?(\d{4})[a-z]?\)?$/;
+const initialsPart = /^(?:\p{Lu}\.?[-\s]?){1,5}$/u;
+const volumePart = /^V(?:ol)?\.?\s?([A-Z]{0,2}\d[\w./-]{0,20}|[IVXLC]{1,8})$/i;
+const pagePart = /^PP?\.?\s?([a-z]{0,3}\d[\w./-]{0,20})$/i;
+const articlePart = /^(?:ARTN|ART|ARTICLE)\.?\s?(?:NO\.?\s?|NUMBER\s?)?([a-z]{0,3}\d[\w./-]{0,20})$/i;
+/** Each repetition begins with "DOI", so that a thousand of them are read in one way only. */
+const identifierStart = /^(?:(?:DOI\b[\s:]{0,9}){1,9}(?=\[?\s?10\.)|(?=https?:\/\/(?:dx\.)?doi\.org\/))/i;
 
-/** Family name of an author as cited-reference lines write it: "MACARTHUR RH" -> "MACARTHUR", "de Vries, J." -> "de Vries". */
+/** Family name of an author as cited-reference lines write it: "MACARTHUR RH" -> "MACARTHUR", "de Vries, J." -> "de Vries". Undefined for anonymous works. */
 export function familyOf(author: string): string | undefined {
   const text = author.trim();
-  if (text === '' || anonymous.test(text) || text.length > 120) return undefined;
-  if (text.includes(',')) return text.split(',')[0].trim() || undefined;
-  const words = text.split(/\s+/);
-  while (words.length > 1 && /^(?:\p{Lu}\.?-?){1,4}$|^(?:jr|sr)\.?$/iu.test(words[words.length - 1]) && words[words.length - 1].replace(/[.-]/g, '').length <= 3) words.pop();
-  return words.join(' ');
+  if (text === '' || text.length > 120 || anonymous.test(text)) return undefined;
+  const name = parseListedName(text);
+  if (!name?.family) return undefined;
+  return name.particle ? `${name.particle} ${name.family}` : name.family;
 }
 
-function takeIdentifier(reference: CitedReference, part: string): boolean {
-  const match = /^(?:DOI\s*:?\s*)+(?=\[?\s*10\.)/i.exec(part) ?? /^(?=https?:\/\/(?:dx\.)?doi\.org\/)/i.exec(part);
-  if (!match) return false;
-  // Several DOIs stand in square brackets at times, and "DOI" is repeated; the first valid one counts.
-  for (const candidate of part.slice(match[0].length).replace(/^\[/, '').split(/,\s*|\s+DOI\s+|\s+/i)) {
-    const doi = normaliseDoi(candidate.replace(/\]$/, ''));
-    if (doi) {
-      reference.doi ??= doi;
-      return true;
-    }
+function yearOf(part: string | undefined): number | undefined {
+  const match = part === undefined ? null : yearPart.exec(part);
+  return match ? findYear(match[1]) : undefined;
+}
+
+/** "DOI 10.x/y", "DOI [10.x/y, DOI 10.z/w]", "https://doi.org/10.x/y": the first valid one counts. */
+function takeIdentifiers(reference: CitedReference, part: string): void {
+  for (const candidate of part.split(/[[\],\s]+/)) {
+    const doi = candidate.length > 6 ? normaliseDoi(candidate) : undefined;
+    if (!doi) continue;
+    reference.doi = doi;
+    return;
   }
-  return true;
+  // A suffix with a comma or a blank in it is rare, a whole DOI that fails is not: the part as one is tried last.
+  const whole = findDoi(part);
+  if (whole) reference.doi = whole;
 }
 
 function takePlace(reference: CitedReference, part: string): boolean {
-  const volume = /^V\.?\s?(\d[\w./-]{0,20})$/i.exec(part);
-  if (volume && !reference.volume) {
+  const volume = reference.volume ? null : volumePart.exec(part);
+  if (volume) {
     reference.volume = volume[1];
     return true;
   }
-  const page = /^(?:PP?\.?\s?)([a-z]?\d[\w./-]{0,20})$/i.exec(part) ?? /^ART(?:N|ICLE)?\.?\s?(?:NO\.?\s?)?([a-z]?\d[\w./-]{0,20})$/i.exec(part);
-  if (page && !reference.page) {
+  const page = reference.page ? null : (pagePart.exec(part) ?? articlePart.exec(part));
+  if (page) {
     reference.page = page[1].split('-')[0];
     return true;
   }
-  return false;
+  const pmid = /^PMID\b/i.test(part) ? normalisePmid(part) : undefined;
+  if (pmid) reference.pmid = pmid;
+  return pmid !== undefined;
 }
 
-/** One line of the comma layout. Never throws; what cannot be told apart ends in `source`. */
-export function parseCitedLine(raw: string, line: number): CitedReference {
-  const reference: CitedReference = { raw, line };
-  const text = raw.trim().replace(/[;.]$/, '');
-  // A DOI may hold a comma and a bracketed list may too: both are taken off the end first.
-  const tail = /,?\s*(DOI\s.*|https?:\/\/(?:dx\.)?doi\.org\/.*)$/i.exec(text);
-  const before = tail ? text.slice(0, tail.index) : text;
-  if (tail) takeIdentifier(reference, tail[1]);
-  const parts = before.split(/,\s+/).map((part) => part.trim()).filter((part) => part !== '');
-  let at = 0;
-  const isYear = (part: string | undefined) => part !== undefined && /^\(?\d{4}[a-z]?\)?$/.test(part) && findYear(part.replace(/[()a-z]/g, '')) !== undefined;
-  if (parts.length > 0 && !isYear(parts[0])) {
+/** Author and year from the left; the number of parts taken. */
+function takeAuthorAndYear(reference: CitedReference, parts: string[]): number {
+  if (parts.length === 0) return 0;
+  let taken = 0;
+  if (yearOf(parts[0]) === undefined) {
     // "de Vries, J., 1990, ...": initials after a comma belong to the author.
-    const initials = parts.length > 2 && !isYear(parts[1]) && isYear(parts[2]) && /^(?:\p{Lu}\.?[-\s]?){1,5}$/u.test(parts[1]);
-    const author = initials ? `${parts[0]}, ${parts[1]}` : parts[0];
-    if (isYear(parts[initials ? 2 : 1]) || parts.length > 2) {
-      at = initials ? 2 : 1;
-      if (!anonymous.test(author)) {
-        reference.author = author;
-        reference.family = familyOf(author);
-      }
+    const withInitials = parts.length > 2 && initialsPart.test(parts[1]) && yearOf(parts[1]) === undefined && (yearOf(parts[2]) !== undefined || !/^V\.?$/i.test(parts[1]));
+    const author = withInitials ? `${parts[0]}, ${parts[1]}` : parts[0];
+    const count = withInitials ? 2 : 1;
+    const placeFollows = volumePart.test(parts[count] ?? '') || pagePart.test(parts[count] ?? '');
+    // One part before the volume is the source; an author stands before a year, or before a source.
+    if (yearOf(parts[count]) === undefined && (parts.length < 3 || placeFollows)) return 0;
+    taken = count;
+    if (!anonymous.test(author)) {
+      reference.author = author;
+      const family = familyOf(author);
+      if (family) reference.family = family;
     }
   }
-  if (isYear(parts[at])) {
-    reference.year = findYear(parts[at].replace(/[()a-z]/g, ''));
-    at += 1;
+  const year = yearOf(parts[taken]);
+  if (year === undefined) return taken;
+  reference.year = year;
+  return taken + 1;
+}
+
+/** One line of the comma layout. Never throws; what cannot be told apart ends in `source`, and a line that tells nothing is `unstructured`. */
+export function parseCitedLine(raw: string, line: number): CitedReference {
+  const bounded = raw.length > longestReference ? raw.slice(0, longestReference) : raw;
+  const reference: CitedReference = { raw: bounded, line };
+  const text = tidyText(bounded).replace(/[;.]$/, '');
+  const parts: string[] = [];
+  let identifiers = '';
+  let from = 0;
+  // A bracketed list of DOIs holds commas and may be followed by nothing: once identifiers begin, the rest is theirs.
+  for (;;) {
+    const end = text.indexOf(', ', from);
+    const part = text.slice(from, end < 0 ? text.length : end).trim();
+    if (identifierStart.test(part)) {
+      identifiers = text.slice(from);
+      break;
+    }
+    if (part !== '') parts.push(part);
+    if (end < 0) break;
+    from = end + 2;
   }
-  const source: string[] = [];
-  for (const part of parts.slice(at)) if (!takeIdentifier(reference, part) && !takePlace(reference, part)) source.push(part);
+  if (identifiers !== '') takeIdentifiers(reference, identifiers);
+  const source = parts.slice(takeAuthorAndYear(reference, parts)).filter((part) => !takePlace(reference, part));
   if (source.length > 0) reference.source = source.join(', ');
   if (!reference.author && !reference.source && !reference.doi) reference.unstructured = true;
   return reference;
 }
 
-/** A reference that is running text: DOI and year are all that is taken from it. */
+/** A reference that is running text: DOI, preprint number and year are all that is taken from it. */
 export function parseUnstructured(raw: string, line: number): CitedReference {
-  const reference: CitedReference = { raw, line, unstructured: true };
-  const doi = findDoi(raw);
+  const bounded = raw.length > longestReference ? raw.slice(0, longestReference) : raw;
+  const reference: CitedReference = { raw: bounded, line, unstructured: true };
+  const doi = findDoi(bounded);
   if (doi) reference.doi = doi;
-  const year = findYear(raw.slice(0, 2_000));
+  else {
+    const preprint = /\barxiv:\s?([\w./-]{9,30})/i.exec(bounded);
+    const id = preprint ? normaliseArxiv(preprint[1].replace(/[.,;]$/, '')) : undefined;
+    // The archive registers its numbers as DOIs of this form.
+    if (id) reference.doi = `10.48550/arxiv.${id}`;
+  }
+  const year = findUnstructuredYear(bounded.slice(0, 2_000));
   if (year) reference.year = year;
   return reference;
+}
+
+/** A year in brackets is the year of the work rather than a number of pages or a year within the title. */
+function findUnstructuredYear(text: string): number | undefined {
+  const withoutDoi = text.replace(/10\.\d{4,9}\/\S{1,300}/g, ' ');
+  for (const match of withoutDoi.matchAll(/\((?:[A-Za-z]{3,9}\.? )?(\d{4})[a-z]?\)/g)) {
+    const year = findYear(match[1]);
+    if (year) return year;
+  }
+  return findYear(withoutDoi);
+}
+
+/** A line whose layout is not known beforehand: the comma layout where it fits, running text else. */
+export function parseAnyReference(raw: string, line: number): CitedReference {
+  const found = parseCitedLine(raw, line);
+  return found.unstructured || (found.year === undefined && !found.volume && !found.page && !found.doi) ? parseUnstructured(raw, line) : found;
 }

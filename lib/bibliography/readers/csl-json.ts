@@ -1,25 +1,27 @@
 /** CSL-JSON: an array of items, or items in an envelope. Numbers may be texts and texts numbers. */
-import { parseDate, parseMonth, parsePages } from '@/lib/bibliography/dates';
+import { parsePages } from '@/lib/bibliography/dates';
 import { findDoi, normaliseArxiv, normaliseOrcid, normalisePmcid, normalisePmid } from '@/lib/bibliography/identifiers';
-import { body } from '@/lib/bibliography/names';
+import { body, parseName } from '@/lib/bibliography/names';
 import { type PersonName, type WorkType } from '@/lib/bibliography/record';
 import { EntryBuilder, ReadSession, type Reader, type ReaderOptions } from '@/lib/bibliography/readers/builder';
-import { datePartsOf, isObject, JsonItemScanner, listOf, textOf, type JsonItem, type JsonObject } from '@/lib/bibliography/readers/json-items';
-import { tidyFields } from '@/lib/bibliography/readers/ris';
+import { JsonItemScanner } from '@/lib/bibliography/readers/json-items';
+import { dateOf, isObject, listOf, own, takeItem, textOf, type JsonObject } from '@/lib/bibliography/readers/json-values';
 
 const types = new Map<string, WorkType>(Object.entries({
   article: 'preprint', 'article-journal': 'article', 'article-magazine': 'article', 'article-newspaper': 'article', review: 'article', 'review-book': 'article', book: 'book', classic: 'book', collection: 'book', periodical: 'book', chapter: 'chapter', entry: 'chapter',
   'entry-dictionary': 'chapter', 'entry-encyclopedia': 'chapter', 'paper-conference': 'conference-paper', speech: 'conference-paper', thesis: 'thesis', report: 'report', standard: 'report', legislation: 'report', dataset: 'dataset', patent: 'patent', software: 'software',
   webpage: 'web', 'post-weblog': 'web', post: 'web',
 }));
+const placed = new Set(['id', 'citation-key', 'citation-label', 'type', 'title', 'author', 'editor', 'issued', 'container-title', 'container-title-short', 'journalAbbreviation', 'volume', 'issue', 'page', 'publisher', 'publisher-place', 'edition', 'abstract', 'language', 'URL', 'keyword', 'DOI', 'PMID', 'PMCID', 'ISSN', 'ISBN']);
 
 function nameOf(value: unknown): PersonName | undefined {
+  if (typeof value === 'string') return parseName(value);
   if (!isObject(value)) return undefined;
-  const literal = textOf(value, 'literal');
+  const literal = textOf(value, 'literal', 'name');
   const family = textOf(value, 'family');
-  if (!family) return literal ? body(literal) : textOf(value, 'given') ? body(textOf(value, 'given') as string) : undefined;
-  const name: PersonName = { family };
   const given = textOf(value, 'given');
+  if (!family) return literal ? body(literal) : given ? body(given) : undefined;
+  const name: PersonName = { family };
   const particle = [textOf(value, 'dropping-particle'), textOf(value, 'non-dropping-particle')].filter(Boolean).join(' ');
   const suffix = textOf(value, 'suffix');
   const orcid = normaliseOrcid(textOf(value, 'ORCID', 'orcid') ?? '');
@@ -31,83 +33,59 @@ function nameOf(value: unknown): PersonName | undefined {
 }
 
 function fill(builder: EntryBuilder, item: JsonObject): void {
-  const { fields } = builder;
   const text = (...names: string[]) => {
     const value = textOf(item, ...names);
     return value === undefined ? undefined : builder.bounded(value, names[0]);
   };
   builder.key = text('id', 'citation-key', 'citation-label');
-  fields.type = types.get(text('type') ?? '') ?? 'other';
-  fields.title = text('title');
   for (const name of listOf(item, 'author')) builder.addAuthor(nameOf(name));
-  const editors = listOf(item, 'editor').map(nameOf).filter((name) => name !== undefined);
-  if (editors.length > 0) fields.editors = editors.slice(0, 1_000);
-  const issued = Object.hasOwn(item, 'issued') ? item.issued : undefined;
-  const [year, month, day] = datePartsOf(issued);
-  if (year !== undefined && year >= 1000 && year <= 2200) Object.assign(fields, { year, month: month && month <= 12 ? month : undefined, day: day && day <= 31 ? day : undefined });
-  else {
-    const written = isObject(issued) ? textOf(issued, 'raw', 'literal', 'date-parts') : typeof issued === 'string' || typeof issued === 'number' ? String(issued) : undefined;
-    if (written) {
-      Object.assign(fields, parseDate(written));
-      if (fields.year === undefined) builder.problem('warning', 'year-not-read', `"${written.slice(0, 60)}" holds no year.`);
-    }
-    if (isObject(issued) && fields.month === undefined) fields.month = parseMonth(textOf(issued, 'month') ?? '');
+  for (const name of listOf(item, 'editor')) builder.addEditor(nameOf(name));
+  const issued = own(item, 'issued');
+  const date = dateOf(issued);
+  if (date.year === undefined && isObject(issued)) {
+    const written = textOf(issued, 'raw', 'literal', 'year');
+    if (written) builder.problem('warning', 'year-not-read', `"${written.slice(0, 60)}" holds no year.`);
   }
-  fields.venue = text('container-title', 'event-title', 'collection-title');
-  fields.venueShort = text('container-title-short', 'journalAbbreviation');
-  fields.volume = text('volume');
-  fields.issue = text('issue');
   const pages = text('page');
-  if (pages) Object.assign(fields, parsePages(pages));
-  fields.articleNumber = fields.firstPage ? undefined : text('article-number', 'number');
-  fields.publisher = text('publisher');
-  fields.place = text('publisher-place');
-  fields.edition = text('edition');
-  fields.abstract = text('abstract');
-  fields.language = text('language');
-  fields.url = text('URL');
-  const keywords = text('keyword');
-  if (keywords) builder.addKeywords(keywords, /[,;]/);
-  builder.setDoi(text('DOI'));
-  if (!fields.identifiers.doi && fields.url && /doi\.org\//i.test(fields.url)) fields.identifiers.doi = findDoi(fields.url);
-  fields.identifiers.pmid = normalisePmid(text('PMID') ?? '');
-  fields.identifiers.pmcid = normalisePmcid(text('PMCID') ?? '');
   const number = text('number') ?? '';
-  if (/arxiv/i.test(number)) fields.identifiers.arxiv = normaliseArxiv(number);
+  builder.set({
+    type: types.get(text('type') ?? '') ?? 'other',
+    title: text('title'),
+    ...date,
+    venue: text('container-title', 'event-title', 'collection-title'),
+    venueShort: text('container-title-short', 'journalAbbreviation'),
+    volume: text('volume'),
+    issue: text('issue'),
+    ...(pages ? parsePages(pages) : {}),
+    articleNumber: text('article-number') ?? (pages ? undefined : text('number')),
+    publisher: text('publisher'),
+    place: text('publisher-place'),
+    edition: text('edition'),
+    abstract: text('abstract'),
+    language: text('language'),
+    url: text('URL'),
+  });
+  const keywords = text('keyword');
+  if (keywords) builder.addKeywords(keywords, keywords.includes(';') ? /;/ : /,/);
+  builder.setDoi(text('DOI'));
+  const { url } = builder.fields;
+  builder.identify({
+    doi: url && /doi\.org\//i.test(url) ? findDoi(url) : undefined,
+    pmid: normalisePmid(text('PMID') ?? ''),
+    pmcid: normalisePmcid(text('PMCID') ?? ''),
+    arxiv: /arxiv/i.test(number) ? normaliseArxiv(number) : undefined,
+  });
   for (const name of ['ISSN', 'ISBN']) for (const value of listOf(item, name).slice(0, 20)) if (typeof value === 'string') builder.addSerialNumber(value);
-  const note = text('note');
-  if (note) builder.other('note', note);
-  if (/^\s*(?:retracted(?: article)?\s*[:.]|\[retracted\])/i.test(fields.title ?? '')) fields.retracted = true;
-}
-
-/** Parses one item and hands it to `fillItem`; what is no object, or no JSON, becomes a rejection. */
-export function takeItem(session: ReadSession, options: ReaderOptions, item: JsonItem, fillItem: (builder: EntryBuilder, object: JsonObject) => void): void {
-  const builder = new EntryBuilder(item.line, options.limits);
-  let parsed: unknown;
-  try {
-    parsed = JSON.parse(item.text);
-  } catch (error) {
-    builder.problem('error', 'invalid-json', `The item is not valid JSON: ${error instanceof Error ? error.message.slice(0, 120) : 'unknown fault'}`);
-    session.emit((position) => builder.rejected(position, item.text));
-    return;
+  for (const name of Object.keys(item)) {
+    const value = placed.has(name) ? undefined : own(item, name);
+    if (typeof value === 'string' || typeof value === 'number') builder.other(name.slice(0, 100), String(value).slice(0, builder.limits.fieldLength));
   }
-  if (!isObject(parsed)) {
-    builder.problem('error', 'not-an-object', 'The item is no object.');
-    session.emit((position) => builder.rejected(position, item.text));
-    return;
-  }
-  fillItem(builder, parsed);
-  tidyFields(builder);
-  const { title, authors, identifiers, venue, url } = builder.fields;
-  if (!title && authors.length === 0 && !identifiers.doi && !venue && !url && !builder.key) {
-    builder.problem('error', 'empty-entry', 'The item holds nothing that describes a work.');
-    session.emit((position) => builder.rejected(position, item.text));
-  } else session.emit((position) => builder.record(position, item.text));
 }
 
 export function createCslJsonReader(options: ReaderOptions): Reader {
   const session = new ReadSession('csl-json', options);
-  const scanner = new JsonItemScanner((item) => takeItem(session, options, item, fill), (code, message, line) => session.problem('error', code, message, line));
+  const newBuilder = (line: number) => new EntryBuilder(line, options.limits);
+  const scanner = new JsonItemScanner((item) => takeItem(session, item, newBuilder, fill), (code, message, line) => session.problem('error', code, message, line));
   return {
     write: (text) => scanner.write(text),
     end() {

@@ -5,195 +5,163 @@
 import { parseCitedLine, parseUnstructured } from '@/lib/bibliography/cited-reference';
 import { parseMonth } from '@/lib/bibliography/dates';
 import { normaliseOrcid, normalisePmid } from '@/lib/bibliography/identifiers';
-import { body, parseInvertedName } from '@/lib/bibliography/names';
+import { body, parseListedName } from '@/lib/bibliography/names';
 import { findYear } from '@/lib/bibliography/normalise';
+import { withoutTags } from '@/lib/bibliography/plain-text';
 import { type WorkType } from '@/lib/bibliography/record';
-import { EntryBuilder, ReadSession, type Reader, type ReaderOptions } from '@/lib/bibliography/readers/builder';
-import { LineSplitter } from '@/lib/bibliography/readers/lines';
-import { tidyFields } from '@/lib/bibliography/readers/ris';
+import { type EntryBuilder, type Reader, type ReaderOptions } from '@/lib/bibliography/readers/builder';
+import { TaggedLineReader, type TaggedValue, type TaggedValues } from '@/lib/bibliography/readers/tagged-lines';
 
 const publicationTypes = new Map<string, WorkType>([['J', 'article'], ['B', 'book'], ['C', 'conference-paper'], ['S', 'article'], ['P', 'patent']]);
 /** Tags whose every line is an item of its own; all others are wrapped prose. */
 const itemised = new Set(['AU', 'AF', 'CR', 'C1', 'BA', 'BF', 'BE', 'GP', 'CA']);
-const placed = new Set(['PT', 'AU', 'AF', 'TI', 'SO', 'JI', 'J9', 'DT', 'LA', 'DE', 'ID', 'AB', 'C1', 'CR', 'NR', 'TC', 'PY', 'PD', 'VL', 'IS', 'BP', 'EP', 'AR', 'DI', 'D2', 'PM', 'SN', 'EI', 'BN', 'PU', 'PI', 'UT', 'OI', 'CA', 'GP']);
+const placed = new Set(['PT', 'AU', 'AF', 'TI', 'SO', 'JI', 'J9', 'DT', 'LA', 'DE', 'ID', 'AB', 'C1', 'CR', 'NR', 'TC', 'PY', 'PD', 'VL', 'IS', 'BP', 'EP', 'AR', 'DI', 'D2', 'PM', 'SN', 'EI', 'BN', 'PU', 'PI', 'UT', 'OI', 'CA', 'GP', 'BE', 'ED', 'ER']);
+const header = /^[A-Z][A-Z0-9]\t(?:[A-Z][A-Z0-9](?:\t|$)){4,}/;
+const tagLine = /^([A-Z][A-Z0-9])(?: (.*)|)$/;
+const anonymous = /^\[?anonymous\]?$/i;
 
-interface Value {
-  text: string;
-  line: number;
-}
-type Tags = Map<string, Value[]>;
-
-function fill(builder: EntryBuilder, tags: Tags): void {
-  const { fields } = builder;
-  const prose = (...names: string[]): string | undefined => {
-    for (const name of names) {
-      const values = tags.get(name);
-      if (!values) continue;
-      const joined = values.map((value) => value.text).join(' ').trim();
-      if (joined !== '') return builder.bounded(joined, name, values[0].line);
+function fillRecord(builder: EntryBuilder, values: TaggedValues): void {
+  const prose = (...tags: string[]): string | undefined => {
+    for (const tag of tags) {
+      const all = values.all(tag);
+      if (all.length > 0) return builder.bounded(all.map((value) => value.text).join(' '), tag, all[0].line);
     }
     return undefined;
   };
-  const lineOf = (name: string) => tags.get(name)?.[0].line ?? builder.line;
+  const lineOf = (...tags: string[]) => values.first(...tags)?.line ?? builder.line;
+  const number = (tag: string) => (/^\d{1,9}$/.test(prose(tag) ?? '') ? Number(prose(tag)) : undefined);
   const documentType = prose('DT') ?? '';
-  fields.type = publicationTypes.get(prose('PT')?.[0] ?? '') ?? 'other';
-  if (/proceedings paper/i.test(documentType)) fields.type = 'conference-paper';
-  else if (/book chapter/i.test(documentType)) fields.type = 'chapter';
-  else if (/data (?:paper|set)/i.test(documentType)) fields.type = 'dataset';
-  if (/retracted publication/i.test(documentType)) fields.retracted = true;
-  const long = tags.get('AF') ?? [];
-  const short = tags.get('AU') ?? [];
-  // Full and short forms run in parallel; the full ones are taken when there are as many.
-  for (const value of long.length >= short.length ? long : short) if (value.text !== '') builder.addAuthor(/^\[?anonymous\]?$/i.test(value.text) ? undefined : parseInvertedName(value.text), value.line);
-  for (const value of [...(tags.get('CA') ?? []), ...(tags.get('GP') ?? [])]) if (value.text !== '') builder.addAuthor(body(value.text), value.line);
-  fields.title = prose('TI');
-  fields.venue = prose('SO');
-  fields.venueShort = prose('JI', 'J9');
-  const year = prose('PY');
-  fields.year = findYear(year ?? '') ?? findYear(prose('PD') ?? '');
-  if (year && fields.year === undefined) builder.problem('warning', 'year-not-read', `"${year.slice(0, 60)}" holds no year.`, lineOf('PY'));
-  fields.month = parseMonth((prose('PD') ?? '').split(/[\s-]/)[0]);
-  fields.volume = prose('VL');
-  fields.issue = prose('IS');
-  fields.firstPage = prose('BP');
-  fields.lastPage = prose('EP');
-  fields.articleNumber = prose('AR');
-  fields.publisher = prose('PU');
-  fields.place = prose('PI');
-  fields.abstract = prose('AB');
-  fields.language = prose('LA');
+  const title = prose('TI');
+  builder.set({
+    type: /proceedings paper/i.test(documentType) ? 'conference-paper' : /book chapter/i.test(documentType) ? 'chapter' : /data (?:paper|set)/i.test(documentType) ? 'dataset' : (publicationTypes.get(prose('PT')?.[0] ?? '') ?? 'other'),
+    retracted: /retracted publication/i.test(documentType) || undefined,
+    title: title === undefined ? undefined : withoutTags(title),
+    venue: prose('SO'),
+    venueShort: prose('JI', 'J9'),
+    volume: prose('VL'),
+    issue: prose('IS'),
+    firstPage: prose('BP'),
+    lastPage: prose('EP'),
+    articleNumber: prose('AR'),
+    publisher: prose('PU'),
+    place: prose('PI'),
+    abstract: prose('AB'),
+    language: prose('LA'),
+    reportedCitations: number('TC'),
+    declaredReferences: number('NR'),
+    month: parseMonth(prose('PD') ?? ''),
+  });
   builder.key = prose('UT');
-  fields.identifiers.accession = builder.key?.slice(0, 200);
-  builder.setDoi(prose('DI', 'D2'), lineOf(tags.has('DI') ? 'DI' : 'D2'));
-  fields.identifiers.pmid = normalisePmid(prose('PM') ?? '');
-  for (const name of ['SN', 'EI', 'BN']) {
-    const value = prose(name);
-    if (value) builder.addSerialNumber(value, lineOf(name));
+  fillNames(builder, values);
+  const year = prose('PY');
+  const found = findYear(year ?? '') ?? findYear(prose('PD') ?? '');
+  builder.set({ year: found });
+  if (year && found === undefined) builder.problem('warning', 'year-not-read', `"${year.slice(0, 60)}" holds no year.`, lineOf('PY'));
+  builder.setDoi(prose('DI', 'D2'), lineOf('DI', 'D2'));
+  builder.identify({ accession: builder.key?.slice(0, 200), pmid: normalisePmid(prose('PM') ?? '') });
+  for (const tag of ['SN', 'EI', 'BN']) {
+    const value = prose(tag);
+    if (value) builder.addSerialNumber(value, lineOf(tag));
   }
-  for (const name of ['DE', 'ID']) {
-    const value = prose(name);
-    if (value) builder.addKeywords(value, /;/);
+  for (const tag of ['DE', 'ID']) {
+    const value = prose(tag);
+    if (value) builder.addKeywords(value, /;/, lineOf(tag));
   }
-  const affiliations = (tags.get('C1') ?? []).map((value) => value.text).filter(Boolean);
-  if (affiliations.length > 0) fields.affiliations = affiliations.slice(0, 1_000).map((text) => text.slice(0, 2_000));
-  for (const claim of (prose('OI') ?? '').split(';')) {
+  for (const { text, line } of values.all('C1')) builder.addAffiliation(text, line);
+  builder.addReferences(values.all('CR').map(({ text, line }) => {
+    const reference = parseCitedLine(text, line);
+    return reference.unstructured ? parseUnstructured(text, line) : reference;
+  }));
+  for (const [tag, all] of values.tags) if (!placed.has(tag)) builder.other(tag, all.map((value) => value.text).join(itemised.has(tag) ? '\n' : ' ').trim(), all[0].line);
+}
+
+function fillNames(builder: EntryBuilder, values: TaggedValues): void {
+  const long = values.all('AF');
+  const short = values.all('AU');
+  // Full and short forms run in parallel; the full ones are taken when there are as many.
+  for (const { text, line } of long.length > 0 && long.length >= short.length ? long : short) if (!anonymous.test(text)) builder.addAuthor(parseListedName(text), line);
+  for (const { text, line } of [...values.all('CA'), ...values.all('GP')]) builder.addAuthor(body(text), line);
+  for (const { text, line } of [...values.all('BE'), ...values.all('ED')]) builder.addEditor(parseListedName(text), line);
+  // "Family, Given/0000-0000-0000-000X; ...": a claim counts when its family name fits one author only.
+  const owners = new Map<string, number>();
+  builder.fields.authors.forEach((name, at) => {
+    const family = (name.particle ? `${name.particle} ${name.family}` : (name.family ?? '')).toLowerCase();
+    owners.set(family, owners.has(family) ? -1 : at);
+  });
+  for (const claim of values.all('OI').map((value) => value.text).join(' ').split(';')) {
     const orcid = normaliseOrcid(claim);
-    const family = claim.split(',')[0].trim().toLowerCase();
-    const owners = fields.authors.filter((name) => name.family?.toLowerCase() === family);
-    if (orcid && owners.length === 1) owners[0].orcid = orcid;
+    const at = owners.get(claim.split(',')[0].trim().toLowerCase()) ?? -1;
+    if (orcid && at >= 0) builder.fields.authors[at].orcid = orcid;
   }
-  const times = Number(prose('TC'));
-  if (prose('TC') && Number.isInteger(times) && times >= 0) fields.reportedCitations = times;
-  const declared = Number(prose('NR'));
-  if (prose('NR') && Number.isInteger(declared) && declared >= 0) fields.declaredReferences = declared;
-  builder.addReferences(
-    (tags.get('CR') ?? []).filter((value) => value.text !== '').map((value) => {
-      const text = value.text.slice(0, 10_000);
-      const reference = parseCitedLine(text, value.line);
-      return reference.unstructured ? parseUnstructured(text, value.line) : reference;
-    }),
-  );
-  for (const [tag, values] of tags) if (!placed.has(tag)) builder.other(tag, values.map((value) => value.text).join(itemised.has(tag) ? '\n' : ' '));
+}
+
+class TaggedReader extends TaggedLineReader implements Reader {
+  protected readonly endTag = 'ER';
+  /** Tags by column, once the file has turned out to be tab-delimited. */
+  private columns: string[] | null = null;
+
+  constructor(options: ReaderOptions) {
+    super('tagged', options);
+  }
+
+  protected fill(builder: EntryBuilder, values: TaggedValues): boolean {
+    fillRecord(builder, values);
+    return !builder.tellsNothing;
+  }
+
+  private takeRow(columns: string[], text: string, line: number): void {
+    if (text.trim() === '') return;
+    const cells = text.split('\t');
+    const record = this.begin(line);
+    record.keepRaw(text);
+    columns.forEach((tag, column) => {
+      const cell = cells[column]?.trim().replace(/^"(.*)"$/, '$1');
+      if (!cell) return;
+      const items = itemised.has(tag) && tag !== 'C1' ? cell.split(/; /) : tag === 'C1' ? cell.split(/; (?=\[)/) : [cell];
+      for (const item of items) record.add(tag, item, line);
+    });
+    if (cells.length > columns.length && cells.slice(columns.length).some((cell) => cell.trim() !== '')) this.session.problem('warning', 'too-many-cells', `The line has ${cells.length} cells, the header names ${columns.length}.`, line);
+    this.close();
+  }
+
+  /** FN, VR and EF frame the file; true when the line was one of them. */
+  private takeFrame(tag: string, line: number): boolean {
+    if (tag === 'EF') {
+      if (this.record) this.session.problem('warning', 'end-missing', 'ER is missing before the end of the file; the record was closed there.', line);
+      this.close();
+      return true;
+    }
+    return !this.record && (tag === 'FN' || tag === 'VR');
+  }
+
+  protected takeLine(text: string, line: number): void {
+    if (this.columns) return this.takeRow(this.columns, text, line);
+    if (!this.record && header.test(text)) {
+      this.columns = text.trimEnd().split('\t').map((tag) => tag.trim());
+      return;
+    }
+    const match = tagLine.exec(text.trimEnd());
+    if (match && this.takeFrame(match[1], line)) return;
+    if (match?.[1] === 'PT' && this.record) {
+      this.session.problem('warning', 'end-missing', 'ER is missing before the next PT; the record was closed there.', line);
+      this.close();
+    }
+    if (!this.record) {
+      if (!match) return this.stray(text, line);
+      if (match[1] === 'ER') return this.session.problem('warning', 'stray-text', 'ER closes a record that never began.', line);
+      if (match[1] !== 'PT') this.session.problem('warning', 'type-missing', `A record begins with ${match[1]}, without PT before it.`, line);
+    }
+    const record = this.record ?? this.begin(line);
+    record.keepRaw(text);
+    if (match?.[1] === 'ER') return this.close();
+    const value: TaggedValue = { text: match ? (match[2] ?? '') : text, line };
+    if (match) record.add(match[1], value.text, line);
+    else if (text.trim() === '') return;
+    else if (itemised.has(record.lastTag)) record.add(record.lastTag, value.text, line);
+    else record.continueWith(value.text);
+  }
 }
 
 export function createTaggedReader(options: ReaderOptions): Reader {
-  const session = new ReadSession('tagged', options);
-  let tags: Tags = new Map();
-  let current: Value[] | null = null;
-  let currentTag = '';
-  let raw: string[] = [];
-  let rawLength = 0;
-  let begun = 0;
-  let ended = false;
-  let header: string[] | null = null;
-
-  const close = (): void => {
-    if (begun === 0) return;
-    const builder = new EntryBuilder(begun, options.limits);
-    fill(builder, tags);
-    tidyFields(builder);
-    const text = raw.join('\n').trimEnd();
-    const empty = !builder.fields.title && builder.fields.authors.length === 0 && !builder.fields.identifiers.doi && builder.fields.references.length === 0;
-    if (empty) builder.problem('error', 'empty-entry', 'The record holds neither title nor authors, DOI or references.');
-    session.emit((position) => (empty ? builder.rejected(position, text) : builder.record(position, text)));
-    tags = new Map();
-    current = null;
-    raw = [];
-    rawLength = 0;
-    begun = 0;
-  };
-
-  const takeRow = (text: string, line: number): void => {
-    if (text.trim() === '') return;
-    const cells = text.split('\t');
-    begun = line;
-    raw = [text];
-    (header as string[]).forEach((tag, column) => {
-      const cell = cells[column]?.trim();
-      if (!cell) return;
-      const items = tag === 'CR' || tag === 'AU' || tag === 'AF' || tag === 'C1' ? cell.split(/;\s+/) : [cell];
-      tags.set(tag, items.map((item) => ({ text: item.trim(), line })));
-    });
-    if (cells.length > (header as string[]).length) session.problem('warning', 'too-many-cells', `The line has ${cells.length} cells, the header names ${(header as string[]).length}.`, line);
-    close();
-  };
-
-  const lines = new LineSplitter((rawLine, line) => {
-    const text = line === 1 ? rawLine.replace(/^\uFEFF/, '') : rawLine;
-    if (header) return takeRow(text, line);
-    if (begun === 0 && /^[A-Z][A-Z0-9]\t(?:[A-Z][A-Z0-9]\t?){4,}/.test(text)) {
-      header = text.split('\t').map((tag) => tag.trim());
-      return;
-    }
-    const match = /^([A-Z][A-Z0-9])(?: (.*))?$/.exec(text.trimEnd());
-    if (match && /^(?:FN|VR|EF)$/.test(match[1]) && (begun === 0 || match[1] === 'EF')) {
-      if (match[1] === 'EF') {
-        if (begun > 0) session.problem('warning', 'end-missing', 'ER is missing before the end of the file; the record was closed there.', line);
-        close();
-        ended = true;
-      }
-      return;
-    }
-    if (match && (match[1] === 'PT' || begun === 0)) {
-      if (begun > 0) {
-        session.problem('warning', 'end-missing', 'ER is missing before the next PT; the record was closed there.', line);
-        close();
-      }
-      if (match[1] === 'ER') return;
-      if (match[1] !== 'PT') session.problem('warning', 'type-missing', `A record begins with ${match[1]}, without PT before it.`, line);
-      begun = line;
-      ended = false;
-    }
-    if (begun === 0) {
-      if (text.trim() !== '' && !ended) session.problem('warning', 'stray-text', `Text outside a record: ${text.trim().slice(0, 60)}`, line);
-      return;
-    }
-    if (rawLength <= options.limits.rawLength) {
-      raw.push(text);
-      rawLength += text.length + 1;
-    }
-    if (match?.[1] === 'ER') return close();
-    if (match) {
-      currentTag = match[1];
-      const value = { text: (match[2] ?? '').trim(), line };
-      const former = tags.get(currentTag);
-      if (former) former.push(value);
-      else tags.set(currentTag, [value]);
-      current = tags.get(currentTag) as Value[];
-    } else if (current && text.trim() !== '') {
-      if (itemised.has(currentTag)) current.push({ text: text.trim(), line });
-      else if (current[current.length - 1].text.length < options.limits.fieldLength) current[current.length - 1].text += ` ${text.trim()}`;
-    }
-  });
-  return {
-    write: (text) => lines.write(text),
-    end() {
-      lines.end();
-      if (begun > 0) {
-        session.problem('warning', 'end-missing', 'The file ends within a record; ER is missing.', begun);
-        close();
-      }
-      return session.summary();
-    },
-  };
+  return new TaggedReader(options);
 }
