@@ -2,7 +2,7 @@ import { type PersonName } from '@/lib/bibliography/record';
 import { Chance } from '@/lib/demonstration/chance';
 import { corporateAuthors, ownAuthor, type NameRegister } from '@/lib/demonstration/names';
 import { type Publication } from '@/lib/demonstration/publication';
-import { departments, topics, type Owner } from '@/lib/demonstration/topics';
+import { topics, type Owner } from '@/lib/demonstration/topics';
 import { chooseKeywords, type TitleRegister, writeAbstract } from '@/lib/demonstration/titles';
 import { chooseVenue, otherTypes, type PageLedger } from '@/lib/demonstration/venues';
 
@@ -137,7 +137,7 @@ function makeWork(topic: number, year: number, chance: Chance, authors: PersonNa
     const venue = chooseVenue(owner, topic, year, chance);
     Object.assign(publication, { venue, publisher: venue.publisher, place: venue.place, ...registers.pages.place(venue, year, chance) });
   } else describeOther(publication, chance);
-  const fitness = hubTitle ? 6 : chance.logNormal(1, 0.95);
+  const fitness = hubTitle ? 2 : Math.min(4, chance.logNormal(1, 0.95));
   return { key: '', publication, owner, topic, hub: hubTitle !== undefined, keywords: chooseKeywords(topics[topic], chance), ...(chance.happens(0.4) ? { abstract: writeAbstract(topics[topic], chance) } : {}), retracted: false, fitness };
 }
 
@@ -164,6 +164,3 @@ function retractSome(list: CataloguedWork[], chance: Chance): void {
   const eligible = list.filter(({ hub, publication }) => !hub && publication.type === 'article' && publication.doi && publication.year > 1999 && publication.year < 2022 && !publication.authors.includes(ownAuthor));
   for (const work of chance.shuffled(eligible).slice(0, 5)) work.retracted = true;
 }
-
-/** Departments in the order in which they are shown, with the faculty last. */
-export const owners: readonly Owner[] = [...departments, 'faculty'];

@@ -15,7 +15,7 @@ const meanReferences = 20.3;
 function ageFactor(age: number, hub: boolean): number {
   if (age < 0) return 0;
   const rise = age === 0 ? 0.15 : age === 1 ? 0.6 : 1;
-  return rise * Math.exp(-age / (hub ? 40 : 13));
+  return rise * Math.exp(-age / (hub ? 30 : 13));
 }
 
 class CitingModel {
@@ -52,7 +52,7 @@ class CitingModel {
 
   private drawInside(topic: number, year: number): number | null {
     const { chance } = this;
-    if (this.hubs.length > 0 && chance.happens(0.006)) {
+    if (this.hubs.length > 0 && chance.happens(0.012)) {
       const hub = chance.pick(this.hubs);
       return this.accepts(hub, year) ? hub : null;
     }

@@ -59,9 +59,10 @@ export function generateDemonstration(seed = 1): Demonstration {
 
   const plan = planFiles(works, citations, new Chance(seed, 4));
   const statistics = emptyStatistics();
-  const ledger = new VariantLedger();
-  const numbers = new Map<Publication, number>(works.map(({ publication }, number) => [publication, number]));
-  const written = plan.map((file, place) => writeFile(file, { works, lists, outside, numbers }, new Chance(seed, 5, place), statistics, ledger));
+  const publications = [...works.map(({ publication }) => publication), ...outside.works];
+  const ledger = new VariantLedger(new Map(publications.map((publication, number) => [publication, number])), works.length);
+  const world = { works, lists, publications, ranks: rankForLists(publications) };
+  const written = plan.map((file, place) => writeFile(file, world, new Chance(seed, 5, place), statistics, ledger));
 
   Object.assign(statistics, {
     works: works.length,
@@ -95,17 +96,24 @@ function describeTruth(works: CataloguedWork[], lists: ReferenceList[]): Demonst
 interface World {
   works: CataloguedWork[];
   lists: ReferenceList[];
-  outside: OutsideLiterature;
-  numbers: Map<Publication, number>;
+  /** Works of the faculty by number, then those outside. */
+  publications: Publication[];
+  ranks: Int32Array;
 }
 
-/** The reference list in the order of a printed one: by author, then year; a careless list names a work twice. */
-function orderList(world: World, number: number, chance: Chance): Publication[] {
-  const { works, lists, outside } = world;
-  const cited = [...lists[number].inside.map((target) => works[target].publication), ...lists[number].outside.map((target) => outside.works[target])];
-  const nameOf = ({ authors: [first] }: Publication) => first?.literal ?? first?.family ?? '';
-  cited.sort((a, b) => (nameOf(a) < nameOf(b) ? -1 : nameOf(a) > nameOf(b) ? 1 : a.year - b.year || (a.title < b.title ? -1 : 1)));
-  return cited.flatMap((publication) => (chance.happens(repeatedShare) ? [publication, publication] : [publication]));
+/** Place of each publication in the order of printed reference lists: by author, year, title. */
+function rankForLists(publications: Publication[]): Int32Array {
+  const keys = publications.map(({ authors: [first], year, title }) => `${first.literal ?? first.family}|${year}|${title}`);
+  const order = [...publications.keys()].sort((a, b) => (keys[a] < keys[b] ? -1 : keys[a] > keys[b] ? 1 : 0));
+  const ranks = new Int32Array(publications.length);
+  order.forEach((number, rank) => (ranks[number] = rank));
+  return ranks;
+}
+
+/** The reference list as printed; a careless list names a work twice. */
+function orderList({ works, lists, publications, ranks }: World, number: number, chance: Chance): Publication[] {
+  const cited = [...lists[number].inside, ...lists[number].outside.map((target) => works.length + target)].sort((a, b) => ranks[a] - ranks[b]);
+  return cited.flatMap((target) => (chance.happens(repeatedShare) ? [publications[target], publications[target]] : [publications[target]]));
 }
 
 function writeFile(plan: PlannedFile, world: World, chance: Chance, statistics: DemonstrationStatistics, ledger: VariantLedger): { owner: string; file: DemonstrationFile } {
@@ -121,7 +129,7 @@ function writeFile(plan: PlannedFile, world: World, chance: Chance, statistics: 
       counts: statistics.variants.kinds,
       onReference: (cited, text) => {
         file.references += 1;
-        ledger.note(number, cited, world.numbers.get(cited), text);
+        ledger.note(number, cited, text);
       },
     });
   };

@@ -39,12 +39,6 @@ export interface VariantCounts {
   [kind: string]: number;
 }
 
-/** Where the text of one record and its tallies go. */
-export interface Written {
-  text: string;
-  references: number;
-}
-
 /** How a source is named in a reference to a work. */
 export function sourceOf(publication: Publication): { full: string; short: string; cited: string } {
   if (publication.venue) return { full: publication.venue.name, short: publication.venue.short, cited: publication.venue.cited };

@@ -55,31 +55,29 @@ export function emptyStatistics(): DemonstrationStatistics {
   };
 }
 
-/** Keeps account of the texts under which each work is cited. */
+/** Keeps account of what was cited, and under how many texts. */
 export class VariantLedger {
-  private readonly texts = new Map<Publication, Set<string>>();
-  private readonly pairs = new Map<number, Set<Publication>>();
-  private readonly inside = new Set<Publication>();
+  private readonly texts = new Set<string>();
+  private readonly cited = new Set<number>();
+  private readonly pairs = new Set<number>();
 
-  note(citing: number, cited: Publication, citedNumber: number | undefined, text: string): void {
-    const texts = this.texts.get(cited);
-    if (texts) texts.add(text);
-    else this.texts.set(cited, new Set([text]));
-    const pairs = this.pairs.get(citing);
-    if (pairs) pairs.add(cited);
-    else this.pairs.set(citing, new Set([cited]));
-    if (citedNumber !== undefined) this.inside.add(cited);
+  /**
+   * @param numbers of all publications, those of the faculty first
+   * @param insideCount how many of them are the faculty's
+   */
+  constructor(private readonly numbers: ReadonlyMap<Publication, number>, private readonly insideCount: number) {}
+
+  note(citing: number, publication: Publication, text: string): void {
+    const cited = this.numbers.get(publication);
+    if (cited === undefined) throw new Error(`"${publication.title}" is cited but was never made.`);
+    this.texts.add(text);
+    this.cited.add(cited);
+    this.pairs.add(citing * this.numbers.size + cited);
   }
 
   summarise(): { cited: number; texts: number; written: number; writtenInside: number } {
-    let texts = 0;
-    for (const set of this.texts.values()) texts += set.size;
-    let written = 0;
     let writtenInside = 0;
-    for (const set of this.pairs.values()) {
-      written += set.size;
-      for (const cited of set) if (this.inside.has(cited)) writtenInside += 1;
-    }
-    return { cited: this.texts.size, texts, written, writtenInside };
+    for (const pair of this.pairs) if (pair % this.numbers.size < this.insideCount) writtenInside += 1;
+    return { cited: this.cited.size, texts: this.texts.size, written: this.pairs.size, writtenInside };
   }
 }

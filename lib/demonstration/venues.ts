@@ -100,16 +100,16 @@ export class PageLedger {
 
   place(venue: Venue, year: number, chance: Chance): Placement {
     const key = `${venue.key}|${year}`;
-    const first = this.nextPage.get(key) ?? 1 + chance.below(12);
+    const first = this.nextPage.get(key) ?? 1 + chance.below(60);
     const length = chance.between(5, 24);
-    this.nextPage.set(key, first + length + chance.below(9));
+    this.nextPage.set(key, first + length + chance.below(100));
     return placeAt(venue, year, first, length);
   }
 }
 
-/** Volume by year, issue and month by page: a volume of 640 pages is shared evenly among its issues. */
+/** Volume by year, issue and month by page: a volume of 720 pages is shared evenly among its issues. What others wrote stands between. */
 export function placeAt(venue: Venue, year: number, first: number, length: number): Placement {
-  const issue = Math.min(venue.issues, 1 + Math.floor((first * venue.issues) / 640));
+  const issue = Math.min(venue.issues, 1 + Math.floor((first * venue.issues) / 720));
   const placement = { volume: String(year - venue.firstYear + 1), issue: String(issue), month: Math.max(1, Math.round((issue * 12) / venue.issues)) };
   if (year >= venue.numberedFrom) return { ...placement, articleNumber: String(100_000 + first * 7).slice(1) };
   return { ...placement, firstPage: String(first), lastPage: String(first + length - 1) };
