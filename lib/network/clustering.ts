@@ -1,5 +1,6 @@
 import { comparePartitions, countGroups, visitTable } from '@/lib/network/agreement';
 import { clusterByLeiden } from '@/lib/network/leiden';
+import { Scratch } from '@/lib/network/level-network';
 import { clusterByLouvain } from '@/lib/network/louvain';
 import { computeModularity } from '@/lib/network/modularity';
 import { deriveSeed } from '@/lib/network/random';
@@ -7,8 +8,9 @@ import { type AnalysisParameters, type WeightedNetwork } from '@/lib/network/typ
 
 /**
  * Which partition to publish, and how firm it is.
- * The method runs once for each of `repeats` seeds. Published is the partition of highest modularity; where several come within 1e-12 of it,
- * the one with the highest mean adjusted Rand index to all others, then the first. Firmness of a work: over all repeats, the mean share
+ * The method runs once for each of `repeats` seeds, Leiden for two rounds each. Chosen is the partition of highest modularity; where several come
+ * within 1e-12 of it, the one with the highest mean adjusted Rand index to all others, then the first. With Leiden it is then run on until nothing
+ * moves, which can only raise its modularity; the later rounds of every repeat would cost as much as all else and change next to nothing. Firmness of a work: over all repeats, the mean share
  * of its published group-mates that are with it in that repeat. Agreement: mean and least adjusted Rand index over all pairs of repeats.
  * Sources: Hubert & Arabie (1985), doi 10.1007/BF01908075; consensus over seeds: Lancichinetti & Fortunato (2012), doi 10.1038/srep00336.
  * Cost: `repeats` clusterings and O(repeats^2 * works). Undefined: agreement with fewer than 2 repeats (null), firmness of a work alone (NaN),
@@ -24,23 +26,27 @@ export interface Clustering {
   firmness: Float64Array;
 }
 
+/** Rounds of Leiden in each repeat; the authors' own programs use as many. */
+const roundsPerRepeat = 2;
+
 export type ClusteringChoice = Pick<AnalysisParameters, 'clustering' | 'resolution' | 'repeats'>;
 
 export function clusterRepeatedly(network: WeightedNetwork, { clustering, resolution, repeats }: ClusteringChoice, seed: number, onRepeat?: (done: number) => void): Clustering {
   const partitions: Int32Array[] = [];
   const qualities: number[] = [];
   const runs = Math.max(1, repeats);
-  const method = clustering === 'leiden' ? clusterByLeiden : clusterByLouvain;
+  const scratch = new Scratch();
   for (let repeat = 0; repeat < runs; repeat += 1) {
-    const { groups } = method(network, resolution, deriveSeed(seed, repeat));
+    const own = deriveSeed(seed, repeat);
+    const { groups } = clustering === 'leiden' ? clusterByLeiden(network, resolution, own, { scratch, maximumIterations: roundsPerRepeat }) : clusterByLouvain(network, resolution, own, scratch);
     partitions.push(groups);
     qualities.push(computeModularity(network, groups, resolution) ?? 0);
     onRepeat?.(repeat + 1);
   }
   const agreement = agreeEachWithEach(partitions);
   const chosen = choose(qualities, agreement.means);
-  const groups = partitions[chosen];
-  return { groups, count: countGroups(groups), modularity: qualities[chosen], agreementMean: agreement.mean, agreementMinimum: agreement.minimum, firmness: measureFirmness(groups, partitions) };
+  const groups = clustering === 'leiden' ? clusterByLeiden(network, resolution, deriveSeed(seed, runs), { scratch, start: partitions[chosen] }).groups : partitions[chosen];
+  return { groups, count: countGroups(groups), modularity: computeModularity(network, groups, resolution) ?? 0, agreementMean: agreement.mean, agreementMinimum: agreement.minimum, firmness: measureFirmness(groups, partitions) };
 }
 
 function choose(qualities: number[], meanAgreements: number[]): number {

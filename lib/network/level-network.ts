@@ -24,39 +24,81 @@ export function startLevel(network: WeightedNetwork): LevelNetwork {
     strengths[work] = strength;
     totalStrength += strength;
   }
-  return { ...network, strengths, totalStrength };
+  return { size: network.size, offsets: network.offsets, neighbours: network.neighbours, weights: network.weights, strengths, totalStrength };
+}
+
+/**
+ * Working arrays that a clustering uses over and over. Each name belongs to one function and is free again when that function returns; arrays
+ * that outlive a call are never taken from here. Without it, most of the time would go into clearing fresh memory.
+ */
+export class Scratch {
+  private readonly kept = new Map<string, Float64Array | Int32Array | Uint8Array>();
+
+  /** Zeros. */
+  reals(name: string, size: number): Float64Array {
+    return this.take(name, size, (length) => new Float64Array(length)).fill(0);
+  }
+
+  wholes(name: string, size: number): Int32Array {
+    return this.take(name, size, (length) => new Int32Array(length)).fill(0);
+  }
+
+  flags(name: string, size: number): Uint8Array {
+    return this.take(name, size, (length) => new Uint8Array(length)).fill(0);
+  }
+
+  /** Whatever was there before: for arrays that are written before they are read. */
+  uncleared(name: string, size: number): Float64Array {
+    return this.take(name, size, (length) => new Float64Array(length));
+  }
+
+  unclearedWholes(name: string, size: number): Int32Array {
+    return this.take(name, size, (length) => new Int32Array(length));
+  }
+
+  private take<T extends Float64Array | Int32Array | Uint8Array>(name: string, size: number, make: (length: number) => T): T {
+    let array = this.kept.get(name) as T | undefined;
+    if (array === undefined || array.length < size) {
+      array = make(size);
+      this.kept.set(name, array);
+    }
+    return array.subarray(0, size) as T;
+  }
 }
 
 /** Contracts each group to one node; links between groups are summed. `groups` is numbered 0 .. count - 1. Cost O(nodes + links). */
-export function contractLevel(level: LevelNetwork, groups: Int32Array, count: number): LevelNetwork {
+export function contractLevel(level: LevelNetwork, groups: Int32Array, count: number, scratch: Scratch): LevelNetwork {
   const { size, offsets, neighbours, weights } = level;
-  const starts = new Uint32Array(count + 1);
+  const starts = scratch.wholes('contract.starts', count + 1);
   for (let node = 0; node < size; node += 1) starts[groups[node] + 1] += 1;
   for (let group = 0; group < count; group += 1) starts[group + 1] += starts[group];
-  const members = new Uint32Array(size);
-  const next = starts.slice();
+  const members = scratch.unclearedWholes('contract.members', size);
+  const next = scratch.unclearedWholes('contract.next', count + 1);
+  next.set(starts);
   for (let node = 0; node < size; node += 1) members[next[groups[node]]++] = node;
 
   const strengths = new Float64Array(count);
   const newOffsets = new Uint32Array(count + 1);
-  // At most as many links as before, and at most all pairs of groups.
-  const capacity = Math.min(neighbours.length, count * (count - 1));
-  const newNeighbours = new Uint32Array(capacity);
-  const newWeights = new Float64Array(capacity);
-  const sums = new Float64Array(count);
-  const met = new Uint32Array(count + 1);
+  const newNeighbours = scratch.unclearedWholes('contract.neighbours', neighbours.length);
+  const newWeights = scratch.uncleared('contract.weights', neighbours.length);
+  const sums = scratch.reals('contract.sums', count);
+  const met = scratch.unclearedWholes('contract.met', count + 1);
   let length = 0;
   for (let group = 0; group < count; group += 1) {
     let found = 0;
-    for (let place = starts[group]; place < starts[group + 1]; place += 1) {
+    let strength = 0;
+    for (let place = starts[group], last = starts[group + 1]; place < last; place += 1) {
       const node = members[place];
-      strengths[group] += level.strengths[node];
+      strength += level.strengths[node];
       for (let link = offsets[node], end = offsets[node + 1]; link < end; link += 1) {
         const other = groups[neighbours[link]];
-        if (sums[other] === 0) met[found++] = other;
-        sums[other] += weights[link];
+        const sum = sums[other];
+        met[found] = other;
+        found += sum === 0 ? 1 : 0;
+        sums[other] = sum + weights[link];
       }
     }
+    strengths[group] = strength;
     for (let place = 0; place < found; place += 1) {
       const other = met[place];
       if (other !== group) {
@@ -68,7 +110,7 @@ export function contractLevel(level: LevelNetwork, groups: Int32Array, count: nu
     }
     newOffsets[group + 1] = length;
   }
-  return { size: count, offsets: newOffsets, neighbours: newNeighbours.slice(0, length), weights: newWeights.slice(0, length), strengths, totalStrength: level.totalStrength };
+  return { size: count, offsets: newOffsets, neighbours: new Uint32Array(newNeighbours.subarray(0, length)), weights: newWeights.slice(0, length), strengths, totalStrength: level.totalStrength };
 }
 
 /** Renumbers groups 0, 1, ... in order of their first node, in place; returns their number. */

@@ -1,4 +1,4 @@
-import { type LevelNetwork } from '@/lib/network/level-network';
+import { type LevelNetwork, type Scratch } from '@/lib/network/level-network';
 import { shuffle, type Random } from '@/lib/network/random';
 
 /**
@@ -12,24 +12,24 @@ import { shuffle, type Random } from '@/lib/network/random';
  *
  * @returns number of moves; `groups` is changed in place
  */
-export function moveNodes(level: LevelNetwork, groups: Int32Array, resolution: number, random: Random): number {
+export function moveNodes(level: LevelNetwork, groups: Int32Array, resolution: number, random: Random, scratch: Scratch): number {
   const { size, offsets, neighbours, weights, strengths, totalStrength } = level;
   if (totalStrength === 0) return 0;
   const pull = resolution / totalStrength;
   const tie = (1e-12 * totalStrength) / size;
-  const groupStrengths = new Float64Array(size);
-  const groupSizes = new Int32Array(size);
+  const groupStrengths = scratch.reals('move.groupStrengths', size);
+  const groupSizes = scratch.wholes('move.groupSizes', size);
   for (let node = 0; node < size; node += 1) {
     groupStrengths[groups[node]] += strengths[node];
     groupSizes[groups[node]] += 1;
   }
-  const empty = new EmptyGroups(groupSizes);
-  const queue = new Int32Array(size);
+  const empty = new EmptyGroups(groupSizes, scratch.unclearedWholes('move.empty', size));
+  const queue = scratch.unclearedWholes('move.queue', size);
   for (let node = 0; node < size; node += 1) queue[node] = node;
   shuffle(queue, random);
-  const waiting = new Uint8Array(size).fill(1);
-  const sums = new Float64Array(size);
-  const met = new Int32Array(size + 1);
+  const waiting = scratch.flags('move.waiting', size).fill(1);
+  const sums = scratch.reals('move.sums', size);
+  const met = scratch.unclearedWholes('move.met', size + 1);
   let head = 0;
   let length = size;
   let moves = 0;
@@ -85,11 +85,9 @@ export function moveNodes(level: LevelNetwork, groups: Int32Array, resolution: n
 
 /** Numbers of groups without nodes. A node only ever moves to a neighbour's group or to a number taken from here, so a number in here stays empty. */
 class EmptyGroups {
-  private readonly numbers: Int32Array;
   private length = 0;
 
-  constructor(sizes: Int32Array) {
-    this.numbers = new Int32Array(sizes.length);
+  constructor(sizes: Int32Array, private readonly numbers: Int32Array) {
     for (let group = sizes.length - 1; group >= 0; group -= 1) if (sizes[group] === 0) this.add(group);
   }
 

@@ -1,5 +1,5 @@
 import { splitDisconnectedGroups } from '@/lib/network/connected-groups';
-import { contractLevel, flattenGroups, renumberGroups, startLevel } from '@/lib/network/level-network';
+import { contractLevel, flattenGroups, renumberGroups, Scratch, startLevel } from '@/lib/network/level-network';
 import { moveNodes } from '@/lib/network/local-moving';
 import { createRandom } from '@/lib/network/random';
 import { type WeightedNetwork } from '@/lib/network/types';
@@ -22,19 +22,19 @@ export interface Partition {
  * The method can leave groups that fall apart inside; they are split at the end and counted.
  * Cost about O(links) a level, few levels. The result depends on the seed. Works without links form groups of one.
  */
-export function clusterByLouvain(network: WeightedNetwork, resolution: number, seed: number): Partition {
+export function clusterByLouvain(network: WeightedNetwork, resolution: number, seed: number, scratch = new Scratch()): Partition {
   const random = createRandom(seed);
   const lifts: Int32Array[] = [];
   let level = startLevel(network);
   let groups: Int32Array = Int32Array.from({ length: level.size }, (_, node) => node);
   let iterations = 0;
   for (;;) {
-    const moves = moveNodes(level, groups, resolution, random);
+    const moves = moveNodes(level, groups, resolution, random, scratch);
     iterations += 1;
     const count = renumberGroups(groups);
     if (moves === 0 || count === level.size) break;
     lifts.push(groups);
-    level = contractLevel(level, groups, count);
+    level = contractLevel(level, groups, count, scratch);
     groups = Int32Array.from({ length: count }, (_, node) => node);
   }
   return { ...splitDisconnectedGroups(network, flattenGroups(groups, lifts)), iterations, stable: true };

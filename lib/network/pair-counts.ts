@@ -91,7 +91,7 @@ class PairSink {
 
   constructor(size: number) {
     this.offsets = new Uint32Array(size + 1);
-    this.partners = new Uint32Array(Math.max(1024, size * 16));
+    this.partners = new Uint32Array(Math.max(1024, size * 64));
     this.counts = new Uint32Array(this.partners.length);
   }
 
@@ -122,7 +122,7 @@ class PairSink {
   private reserve(extra: number): void {
     const needed = this.length + extra;
     if (needed <= this.partners.length) return;
-    const capacity = Math.max(needed, Math.ceil(this.partners.length * 1.6));
+    const capacity = Math.max(needed, 2 * this.partners.length);
     this.partners = grown(this.partners, capacity);
     this.counts = grown(this.counts, capacity);
   }

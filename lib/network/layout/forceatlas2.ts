@@ -18,7 +18,7 @@ export interface ForceSettings {
   openness: number;
 }
 
-export const defaultForces: ForceSettings = { repulsion: 10, gravity: 0.05, openness: 1.2 };
+export const defaultForces: ForceSettings = { repulsion: 10, gravity: 0.05, openness: 1.4 };
 
 /**
  * ForceAtlas2: linked nodes attract in proportion to weight and distance, all nodes repel in proportion to their masses and the inverse of

@@ -14,7 +14,7 @@ const largestMerge = 6;
 const smallestSize = 4;
 /** Distance at which two works joined by a mean link stand still under the default forces. */
 const linkLength = 6;
-const steps = { coarsest: 300, between: 40, finest: 60 };
+const steps = { coarsest: 300, between: 30, finest: 40 };
 
 interface Level {
   network: LayoutNetwork;

@@ -27,6 +27,18 @@ describe('competition ranks', () => {
     expect([...rankDescending(values)]).toEqual([1, 1, 3, 3, 5]);
   });
 
+  it('hold for numbers of every size and sign, read as little-endian words', () => {
+    fc.assert(
+      fc.property(fc.array(fc.double({ noNaN: true, noDefaultInfinity: true })), (values) => {
+        const sorted = [...new Set(values.map((value) => value + 0))].sort((one, other) => other - one);
+        const apart = sorted.every((value, place) => place === 0 || sorted[place - 1] - value > 1e-8 * Math.max(Math.abs(value), Math.abs(sorted[place - 1])));
+        fc.pre(apart);
+        expect([...rankDescending(values)]).toEqual(values.map((value) => 1 + values.filter((other) => other > value).length));
+      }),
+    );
+    expect([...rankDescending([0, -0, -1, Infinity, -Infinity])]).toEqual([2, 2, 4, 1, 5]);
+  });
+
   it('refuse what is not a number', () => {
     expect(() => rankDescending([1, NaN])).toThrow('not a number');
     expect([...rankDescending([])]).toEqual([]);
