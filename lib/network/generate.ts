@@ -32,7 +32,7 @@ export function generateNetwork({ works, meanReferences, outsideCitations, seed 
   const outside = citeOutside(works, topic, topics, outsideCitations, random, citing, cited);
   const list: AnalysisWorkInput[] = [];
   for (let work = 0; work < works; work += 1) list.push(makeWork(`w${work}`, topic[work], year[work], true, random));
-  for (let work = 0; work < outside.length; work += 1) list.push(makeWork(`x${work}`, outside[work], firstYear + random.below(years), false, random));
+  for (let work = 0; work < outside.length; work += 1) list.push(makeWork(`x${work}`, outside[work], firstYear - 30 + random.below(31), false, random));
   return { works: list, citing: Uint32Array.from(citing), cited: Uint32Array.from(cited) };
 }
 

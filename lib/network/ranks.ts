@@ -1,8 +1,9 @@
 /**
  * Competition ranks: 1 + the number of items that are strictly better; 9, 7, 7, 5, 5, 5, 1 gives 1, 2, 2, 4, 4, 4, 7.
  * Items are tied when they lie within 1e-9, relative to the larger amount, of the best item of their group; that keeps rounding
- * from deciding between equals. Higher is better. Empty gives empty. NaN has no rank and throws a RangeError.
+ * from deciding between equals. Higher is better. Empty gives empty. NaN and infinities have no rank and throw a RangeError.
  * Sorts by radix over the bits of the numbers, 11 at a time, leaving out digits that all share: O(n), which hundreds of replicates need.
+ * Reads the halves of a number as on little-endian machines, which are all that Node runs on but one.
  */
 const relativeTie = 1e-9;
 const digitBits = 11;
@@ -47,7 +48,7 @@ export class Ranker {
     counts.fill(0);
     for (let item = 0; item < size; item += 1) {
       const value = values[item];
-      if (Number.isNaN(value)) throw new RangeError('A value that is not a number has no rank.');
+      if (!Number.isFinite(value)) throw new RangeError(`A value of ${value} has no rank.`);
       // Adding 0 makes minus zero zero: they are equal, but their bits are not.
       reals[item] = value + 0;
     }

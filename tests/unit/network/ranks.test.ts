@@ -27,7 +27,7 @@ describe('competition ranks', () => {
     expect([...rankDescending(values)]).toEqual([1, 1, 3, 3, 5]);
   });
 
-  it('hold for numbers of every size and sign, read as little-endian words', () => {
+  it('hold for numbers of every size and sign', () => {
     fc.assert(
       fc.property(fc.array(fc.double({ noNaN: true, noDefaultInfinity: true })), (values) => {
         const sorted = [...new Set(values.map((value) => value + 0))].sort((one, other) => other - one);
@@ -36,11 +36,11 @@ describe('competition ranks', () => {
         expect([...rankDescending(values)]).toEqual(values.map((value) => 1 + values.filter((other) => other > value).length));
       }),
     );
-    expect([...rankDescending([0, -0, -1, Infinity, -Infinity])]).toEqual([2, 2, 4, 1, 5]);
+    expect([...rankDescending([0, -0, -1, 1e308, -1e308])]).toEqual([2, 2, 4, 1, 5]);
   });
 
   it('refuse what is not a number', () => {
-    expect(() => rankDescending([1, NaN])).toThrow('not a number');
+    for (const value of [NaN, Infinity, -Infinity]) expect(() => rankDescending([1, value])).toThrow('has no rank');
     expect([...rankDescending([])]).toEqual([]);
   });
 });
