@@ -53,7 +53,7 @@ export function useAddressState<Filter extends string = never>({ sort: firstSort
     [firstSort, firstSize],
   );
   const hrefOf = useCallback((change: AddressChange<Filter>) => href(changes(change)), [href, changes]);
-  const set = useCallback((change: AddressChange<Filter>, how: 'push' | 'replace' = 'push') => go(changes(change), how), [go, changes]);
+  const set = useCallback((change: AddressChange<Filter>, how: 'push' | 'replace' = 'push') => (fromServer ? go : show)(changes(change), how), [fromServer, go, show, changes]);
   const query = useMemo(() => ({ sort: sort || undefined, page, pageSize, ...filters }), [sort, page, pageSize, filters]);
   const filtered = Object.values<string>(filters).some((value) => value !== '');
   return { sort, page, pageSize, filters, filtered, query, hrefOf, set };

@@ -2,7 +2,7 @@
 
 import { createContext, useCallback, useContext, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
 
-import { Button, IconButton } from '@/components/ui/button';
+import { IconButton } from '@/components/ui/button';
 import { Icon } from '@/components/ui/icons';
 
 interface Toast {
@@ -46,7 +46,11 @@ function ToastLine({ toast, onClose, onUndo }: { toast: Toast; onClose: () => vo
       className="pointer-events-auto flex min-h-11 items-center gap-3 rounded-sm border border-thread-strong bg-paper py-1 pr-1 pl-4 text-[14.5px] shadow-float"
     >
       <span className="min-w-0 flex-1">{toast.text}</span>
-      {toast.undo && <Button kind="quiet" className="px-2 text-indigo underline underline-offset-2 hover:text-indigo-strong" onClick={onUndo}>Undo</Button>}
+      {toast.undo && (
+        <button type="button" onClick={onUndo} className="min-h-9 px-2 font-semibold text-indigo underline decoration-1 underline-offset-[3px] hover:text-indigo-strong">
+          Undo
+        </button>
+      )}
       <IconButton label="Dismiss" className="border-transparent bg-transparent" onClick={onClose}>
         <Icon name="close" />
       </IconButton>
