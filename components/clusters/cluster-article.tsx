@@ -1,5 +1,6 @@
 import Link from 'next/link';
 
+import { workName } from '@/components/analyses/work-name';
 import { FirmnessRuler } from '@/components/clusters/firmness-ruler';
 import { ClusterSwatch } from '@/components/ui/cluster-swatch';
 import { count, formatDecimal, formatNumber, formatShare } from '@/components/ui/numbers';
@@ -64,8 +65,8 @@ export function ClusterArticle({ cluster, base, query }: ClusterArticleProps) {
             {cluster.coreWorks.map((work) => (
               <li key={work.workId} className="flex items-baseline justify-between gap-4 py-1.5">
                 <span className="min-w-0">
-                  <Link href={`/works/${work.workId}`} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{work.title ?? 'Untitled work'}</Link>{' '}
-                  <span className="text-small text-ink-soft">{[work.authors, work.year].filter((part) => part !== null).join(' · ')}</span>
+                  <Link href={`/works/${work.workId}`} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{workName(work)}</Link>{' '}
+                  <span className="text-small text-ink-soft">{work.title !== null && [work.authors, work.year].filter((part) => part !== null).join(' · ')}</span>
                 </span>
                 <span className="shrink-0 text-small text-ink-soft">
                   rank {formatNumber(work.rank)} · <Link href={`${base}/rankings?evidence=inDegree:${work.workId}${query}`}>{count(work.inDegree, 'citation')}</Link>

@@ -26,15 +26,19 @@ export function dyeOf(cluster: number, scheme: Scheme): string {
   return dyes[scheme][cluster] ?? inks[scheme].none;
 }
 
-/** The same as a custom property, for HTML. */
-export function dyeVariable(cluster: number): string {
-  return cluster >= 0 && cluster < dyes.light.length ? `var(--dye-${cluster + 1})` : 'var(--dye-none)';
-}
-
 /** "#rrggbb" with an opacity of 0..1 as rgba(). */
 export function withOpacity(hex: string, opacity: number): string {
   const [red, green, blue] = [1, 3, 5].map((from) => Number.parseInt(hex.slice(from, from + 2), 16));
   return `rgba(${red},${green},${blue},${opacity})`;
+}
+
+/** A colour part of the way towards another; what is not looked at steps back so. */
+export function mixed(hex: string, towards: string, share: number): string {
+  const parts = [1, 3, 5].map((from) => {
+    const [own, other] = [hex, towards].map((colour) => Number.parseInt(colour.slice(from, from + 2), 16));
+    return Math.round(own + (other - own) * share).toString(16).padStart(2, '0');
+  });
+  return `#${parts.join('')}`;
 }
 
 /** Lines of the weave that tells patches apart without colour: degrees, and pixels between threads. */

@@ -29,9 +29,11 @@ interface Grid {
   low: number;
 }
 
-function gridOf({ x, y }: Extent): Grid {
+/** Wider than the map by the reach of the brush, so that cloth is never cut off straight. */
+function gridOf({ x, y }: Extent, deviation: number): Grid {
   const cell = Math.max(x[1] - x[0], y[1] - y[0]) / gridCells;
-  return { columns: Math.ceil((x[1] - x[0]) / cell) + 1, rows: Math.ceil((y[1] - y[0]) / cell) + 1, cell, left: x[0], low: y[0] };
+  const margin = Math.ceil(deviation * 2.5);
+  return { columns: Math.ceil((x[1] - x[0]) / cell) + 1 + 2 * margin, rows: Math.ceil((y[1] - y[0]) / cell) + 1 + 2 * margin, cell, left: x[0] - margin * cell, low: y[0] - margin * cell };
 }
 
 function blur(values: Float64Array, columns: number, rows: number, deviation: number): Float64Array {
@@ -52,7 +54,7 @@ function blur(values: Float64Array, columns: number, rows: number, deviation: nu
 }
 
 /** Density of each cluster's members over the grid, scaled so that its highest value is 1. */
-function densities(map: Pick<AnalysisMap, 'x' | 'y' | 'cluster'>, clusters: readonly number[], grid: Grid): Float64Array[] {
+function densities(map: Pick<AnalysisMap, 'x' | 'y' | 'cluster'>, clusters: readonly number[], grid: Grid, deviation: number): Float64Array[] {
   const { columns, rows } = grid;
   const place = new Map(clusters.map((cluster, index) => [cluster, index]));
   const fields = clusters.map(() => new Float64Array(columns * rows));
@@ -63,8 +65,6 @@ function densities(map: Pick<AnalysisMap, 'x' | 'y' | 'cluster'>, clusters: read
     const row = Math.round((map.y[work] - grid.low) / grid.cell);
     if (column >= 0 && row >= 0 && column < columns && row < rows) fields[index][row * columns + column] += 1;
   }
-  // Few works need a wider brush, or each of them would lie on a patch of its own.
-  const deviation = Math.min(8, Math.max(2.6, (gridCells * 0.75) / Math.sqrt(Math.max(1, map.x.length))));
   return fields.map((field) => {
     const smooth = blur(field, columns, rows, deviation);
     const highest = smooth.reduce((most, value) => Math.max(most, value), 0);
@@ -97,8 +97,10 @@ export function clusterPatches(map: Pick<AnalysisMap, 'x' | 'y' | 'cluster' | 'c
   for (const cluster of map.cluster) if (cluster >= 0) members.set(cluster, (members.get(cluster) ?? 0) + 1);
   const clusters = [...members].filter(([, size]) => size >= leastMembers).map(([cluster]) => cluster).sort((a, b) => a - b).slice(0, mostPatches);
   if (clusters.length === 0) return [];
-  const grid = gridOf(extentOf(map.x, map.y));
-  const fields = densities(map, clusters, grid);
+  // Few works need a wider brush, or each of them would lie on a patch of its own.
+  const deviation = Math.min(8, Math.max(2.6, (gridCells * 0.75) / Math.sqrt(map.x.length)));
+  const grid = gridOf(extentOf(map.x, map.y), deviation);
+  const fields = densities(map, clusters, grid, deviation);
   return clusters.flatMap((cluster, index) => {
     const own = fields[index];
     // The seam between two patches: a little more than their line of equal density.

@@ -1,5 +1,6 @@
 import { dyeOf, inks, weaveOf, type Scheme } from '@/components/map/dyes';
 import { extentOf } from '@/components/map/extent';
+import { labelOfCluster } from '@/components/map/label-layer';
 import { clusterPatches, type Patch } from '@/components/map/patches';
 import { isUncertain, knotSide, partThreads } from '@/components/map/threads';
 import { xmlText } from '@/lib/analyses/reading/xml-text';
@@ -84,7 +85,7 @@ function drawLabels(map: AnalysisMap, patches: readonly Patch[], at: (x: number,
       const cluster = names.get(patch.cluster);
       if (!cluster) return [];
       const [x, y] = at(...patch.top);
-      const text = cluster.number < 10 ? `${cluster.letter} · ${clip(cluster.name, 34)}` : cluster.letter;
+      const text = cluster.number < 10 ? labelOfCluster(cluster, 34) : cluster.letter;
       return `<text x="${Math.min(frameWidth - 120, Math.max(120, x))}" y="${Math.max(headHeight + 16, y - 7)}" text-anchor="middle" font-family="Newsreader, Georgia, serif" font-size="15" font-weight="600" fill="${inks[scheme].ink}" stroke="${inks[scheme].ground}" stroke-width="4" paint-order="stroke" stroke-linejoin="round">${xmlText(text)}</text>`;
     })
     .join('');
@@ -95,7 +96,7 @@ function drawLegend(map: AnalysisMap, scheme: Scheme): string {
   const rows = map.clusters.slice(0, mostInLegend).map((cluster, index) => {
     const y = headHeight + 34 + index * 36;
     const ruler = cluster.firmness === null ? '' : `<path d="M0 ${y + 12}H${round(240 * cluster.firmness)}" stroke="${inkSoft}" stroke-width="5" stroke-dasharray="2 2"/><path d="M0 ${y + 15.5}H240" stroke="${thread}" stroke-width="0.7"/>`;
-    return `<rect x="0" y="${y - 10}" width="11" height="11" rx="1" fill="${dyeOf(cluster.number, scheme)}"/><text x="19" y="${y}" fill="${ink}">${xmlText(`${cluster.letter}  ${clip(cluster.name, 28)}`)}</text><text x="240" y="${y}" text-anchor="end" fill="${ink}">${cluster.size}</text>${ruler}`;
+    return `<rect x="0" y="${y - 10}" width="11" height="11" rx="1" fill="${dyeOf(cluster.number, scheme)}"/><text x="19" y="${y}" fill="${ink}">${xmlText(labelOfCluster(cluster, 24))}</text><text x="240" y="${y}" text-anchor="end" fill="${ink}">${cluster.size}</text>${ruler}`;
   });
   const y = headHeight + 34 + rows.length * 36;
   const more = map.clusters.length > mostInLegend ? `<text x="0" y="${y}" fill="${inkSoft}">and ${map.clusters.length - mostInLegend} smaller clusters</text>` : '';

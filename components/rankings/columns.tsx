@@ -1,6 +1,7 @@
 import Link from 'next/link';
 import { type ComponentProps } from 'react';
 
+import { workName } from '@/components/analyses/work-name';
 import { IntervalBar } from '@/components/charts/interval-bar';
 import { type EvidenceMeasure } from '@/components/rankings/work-evidence';
 import { type DataColumn } from '@/components/tables/columns';
@@ -23,12 +24,12 @@ function Title({ work }: { work: AnalysisWorkItem }) {
   return (
     <span className="grid gap-0.5">
       <span className="font-serif text-work font-medium [overflow-wrap:anywhere]">
-        <Link href={`/works/${work.id}`} className="text-ink no-underline hover:underline">{work.title ?? 'Untitled work'}</Link>
+        <Link href={`/works/${work.id}`} className="text-ink no-underline hover:underline">{workName(work)}</Link>
         {work.retracted && <span className="ml-2 align-middle font-sans"><Pill tone="problem">Retracted</Pill></span>}
       </span>
       <span className="text-small text-ink-soft">
-        {[work.authors, work.year ?? 'no year', work.venue].filter(Boolean).join(' · ')}
-        {!work.catalogued && ' · cited only'}
+        {work.title !== null && [work.authors, work.year ?? 'no year', work.venue].filter(Boolean).join(' · ')}
+        {!work.catalogued && (work.title === null ? 'cited only' : ' · cited only')}
         {work.inLoop && ' · in a loop'}
       </span>
     </span>

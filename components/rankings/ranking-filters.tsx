@@ -27,9 +27,9 @@ export function RankingFilters({ filters, clusters, onChange }: RankingFiltersPr
   };
   return (
     <>
-      <FilterField label="Filter by title, author or venue" value={filters.q} onChange={(q) => onChange({ q: q || null }, 'replace')} className="sm:w-64" />
-      <FilterField label="Published from, year" placeholder="From year" value={filters.yearFrom} onChange={(year) => onChange({ yearFrom: year || null }, 'replace')} className="w-[6.75rem]!" />
-      <FilterField label="Published to, year" placeholder="To year" value={filters.yearTo} onChange={(year) => onChange({ yearTo: year || null }, 'replace')} className="w-[6.75rem]!" />
+      <div className="w-full sm:w-64"><FilterField label="Filter by title, author or venue" value={filters.q} onChange={(q) => onChange({ q: q || null }, 'replace')} /></div>
+      <div className="w-28"><FilterField label="Published from, year" placeholder="From year" value={filters.yearFrom} onChange={(year) => onChange({ yearFrom: year || null }, 'replace')} /></div>
+      <div className="w-28"><FilterField label="Published to, year" placeholder="To year" value={filters.yearTo} onChange={(year) => onChange({ yearTo: year || null }, 'replace')} /></div>
       <SelectField label="Cluster" labelHidden className="w-56 max-w-full text-table" value={`${filters.basis || 'cocitation'}:${filters.cluster}`} onChange={(event) => chooseCluster(event.target.value)}>
         {bases.map((basis) => (
           <optgroup key={basis} label={basisWords[basis]}>

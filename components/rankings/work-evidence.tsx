@@ -4,6 +4,7 @@ import Link from 'next/link';
 import { useState } from 'react';
 
 import { useEvidence } from '@/components/analyses/use-analyses';
+import { workName } from '@/components/analyses/work-name';
 import { DistributionStrip } from '@/components/charts/distribution-strip';
 import { YearBars } from '@/components/charts/year-bars';
 import { EvidencePanel } from '@/components/evidence/evidence-panel';
@@ -77,7 +78,7 @@ export function WorkEvidence({ analysisId, measure, work, spreads, onClose }: Wo
     <EvidencePanel
       panelKey={`${measure}:${work}`}
       title={evidence ? titleOf(evidence) : 'Evidence'}
-      subject={evidence && <Link href={`/works/${evidence.work.id}`}>{evidence.work.title ?? 'Untitled work'}</Link>}
+      subject={evidence && <Link href={`/works/${evidence.work.id}`}>{workName(evidence.work)}</Link>}
       facts={evidence && <>{[evidence.work.authors, evidence.work.year].filter((part) => part !== null).join(' · ')} {evidence.work.retracted && <Pill tone="problem">Retracted</Pill>}</>}
       loading={isLoading && !evidence}
       problem={error?.message ?? null}

@@ -1,7 +1,8 @@
+import { restrictMap } from '@/components/map/restrict-map';
 import { drawStaticMap } from '@/components/map/static-map';
 import { graphml } from '@/lib/analyses/reading/export-network';
 import { csvTable, jsonTable } from '@/lib/analyses/reading/export-table';
-import { readMap, restrictMap } from '@/lib/analyses/reading/map';
+import { readMap } from '@/lib/analyses/reading/map';
 import { provenanceLine, provenanceOf, type Provenance } from '@/lib/analyses/reading/provenance';
 import { type ExportQuery } from '@/lib/analyses/reading/queries';
 import { walkAnalysisWorks, workIdsOf } from '@/lib/analyses/reading/works';

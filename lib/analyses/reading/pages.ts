@@ -4,7 +4,9 @@ import { cache } from 'react';
 import { may } from '@/lib/access/permissions';
 import { loadAnalysis, presentAnalyses } from '@/lib/analyses/reading/analyses';
 import { chooseCluster, listClusters } from '@/lib/analyses/reading/clusters';
-import { analysisWorksQuery, clustersQuery } from '@/lib/analyses/reading/queries';
+import { exportCautions } from '@/lib/analyses/reading/methods';
+import { provenanceLine } from '@/lib/analyses/reading/provenance';
+import { analysisWorksQuery, clustersQuery, mapQuery } from '@/lib/analyses/reading/queries';
 import { readSpread } from '@/lib/analyses/reading/spread';
 import { listAnalysisWorks, topWorksInLoops } from '@/lib/analyses/reading/works';
 import { queryOfPage } from '@/lib/api/page-query';
@@ -84,4 +86,11 @@ export async function readClusters(chosen: AnalysisView, search: Search) {
 export async function firstParameters(portfolio: Pick<Portfolio, 'id' | 'periodFrom' | 'periodTo'>, like: string | null): Promise<AnalysisParameters> {
   const earlier = like && /^[1-9]\d{0,15}$/.test(like) ? await Analysis.findOne({ where: { id: Number(like), portfolioId: portfolio.id } }) : null;
   return earlier?.parameters ?? { ...defaultParameters, periodFrom: portfolio.periodFrom ?? null, periodTo: portfolio.periodTo ?? null };
+}
+
+/** What the page of the map knows before the map itself is read. */
+export function readMapPage(chosen: AnalysisView, portfolio: string, search: Search) {
+  const { basis } = queryOfPage(mapQuery, search);
+  const provenance = provenanceLine({ portfolio, analysisId: chosen.id, finishedAt: chosen.finishedAt, parameters: chosen.parameters, fingerprints: chosen.fingerprints });
+  return { basis, caution: exportCautions(chosen.coverage)[0], provenance };
 }

@@ -20,11 +20,11 @@ export interface Provenance {
 
 function filtersOf(query: ExportQuery): Record<string, string | number> {
   const filters: Record<string, string | number> = {};
-  for (const name of ['q', 'yearFrom', 'yearTo', 'cluster', 'catalogued'] as const) {
+  for (const name of ['q', 'yearFrom', 'yearTo', 'cluster', 'off', 'catalogued'] as const) {
     const value = query[name];
     if (value !== undefined && value !== '') filters[name] = value;
   }
-  if (filters.cluster !== undefined) filters.basis = query.basis;
+  if (filters.cluster !== undefined || filters.off !== undefined) filters.basis = query.basis;
   return { ...filters, sort: `${query.sort.descending ? '-' : ''}${query.sort.field}` };
 }
 
@@ -46,7 +46,7 @@ export function provenanceOf(analysis: Analysis, portfolio: string, query: Expor
 }
 
 /** One line below a picture or in the head of a network file. */
-export function provenanceLine(provenance: Provenance): string {
+export function provenanceLine(provenance: Pick<Provenance, 'portfolio' | 'analysisId' | 'finishedAt' | 'parameters' | 'fingerprints'>): string {
   const day = provenance.finishedAt === null ? '' : `, ${new Date(provenance.finishedAt).toLocaleDateString('en-GB', { day: 'numeric', month: 'long', year: 'numeric', timeZone: 'UTC' })}`;
   const result = provenance.fingerprints.result === null ? '' : ` · result ${provenance.fingerprints.result.slice(0, 12)}`;
   return `Heddle · ${provenance.portfolio} · analysis ${provenance.analysisId}${day} · seed ${provenance.parameters.seed}${result}`;

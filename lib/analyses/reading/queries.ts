@@ -15,6 +15,8 @@ const filters = {
   yearTo: yearQuery,
   /** Letter of a cluster on `basis`, or "none" for works without one. */
   cluster: z.string().regex(/^([A-Z]{1,4}|none)$/, 'must be the letter of a cluster, or none').optional(),
+  /** Letters of clusters on `basis` to leave out, "-" for works in no cluster; as hidden on the map. */
+  off: z.string().max(2_000).regex(/^([A-Z]{1,4}|-)(,([A-Z]{1,4}|-))*$/, 'must be letters of clusters with commas between').optional(),
   basis,
   catalogued: z.enum(['true', 'false']).optional(),
 };
@@ -24,7 +26,7 @@ const sort = sortBy(workSorts, 'rank');
 /** Filters and sort of the ranking; the table, its exports and the map's table twin share them. */
 export const analysisWorksQuery = z.object({ ...filters, page: paging.page, pageSize: paging.pageSize, sort });
 export type AnalysisWorksQuery = z.output<typeof analysisWorksQuery>;
-export type WorkFilters = Pick<AnalysisWorksQuery, 'q' | 'yearFrom' | 'yearTo' | 'cluster' | 'basis' | 'catalogued'>;
+export type WorkFilters = Pick<AnalysisWorksQuery, 'q' | 'yearFrom' | 'yearTo' | 'cluster' | 'off' | 'basis' | 'catalogued'>;
 
 export const clustersQuery = z.object({ basis, page: paging.page, pageSize: paging.pageSize });
 export const mapQuery = z.object({ basis });

@@ -135,6 +135,13 @@ function conditionOf(analysisId: number, filters: WorkFilters, letters: ClusterL
     const number = [...letters[filters.basis]].find(([, letter]) => letter === filters.cluster)?.[0] ?? -1;
     add(`${clusterColumns[filters.basis]} = :cluster`, 'cluster', number);
   }
+  if (filters.off !== undefined) {
+    const off = new Set(filters.off.split(','));
+    const column = clusterColumns[filters.basis];
+    if (off.has('-')) where.push(`${column} IS NOT NULL`);
+    const numbers = [...letters[filters.basis]].flatMap(([number, letter]) => (off.has(letter) ? [number] : []));
+    if (numbers.length > 0) add(`(${column} IS NULL OR ${column} NOT IN (:off))`, 'off', numbers);
+  }
   return { sql: where.join(' AND '), replacements };
 }
 
@@ -171,8 +178,8 @@ export async function* walkAnalysisWorks(analysisId: number, query: WorkFilters 
 
 /** Ids of the works that fit, or null where nothing is filtered. */
 export async function workIdsOf(analysisId: number, filters: WorkFilters): Promise<Set<string> | null> {
-  const { q, yearFrom, yearTo, cluster, catalogued } = filters;
-  if (!q && [yearFrom, yearTo, cluster, catalogued].every((value) => value === undefined)) return null;
+  const { q, yearFrom, yearTo, cluster, off, catalogued } = filters;
+  if (!q && [yearFrom, yearTo, cluster, off, catalogued].every((value) => value === undefined)) return null;
   const condition = conditionOf(analysisId, filters, await readLetters(analysisId));
   const rows = await select<{ workId: number }>(null, `SELECT workId FROM analysis_works WHERE ${condition.sql}`, condition.replacements);
   return new Set(rows.map((row) => String(row.workId)));

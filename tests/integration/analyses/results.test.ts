@@ -30,7 +30,7 @@ async function listed(query = ''): Promise<(string | undefined)[]> {
 describe('the ranking', () => {
   it('answers 401 without a session, 422 to what it does not know, 404 to strangers', async () => {
     expect((await get(getWorks, 'works', '', null)).status).toBe(401);
-    for (const query of ['?sort=raw', '?yearFrom=x', '?cluster=a', '?basis=friendship', '?pageSize=201', '?page=0', '?catalogued=maybe']) expect((await get(getWorks, 'works', query)).status).toBe(422);
+    for (const query of ['?sort=raw', '?yearFrom=x', '?cluster=a', '?off=A,,B', '?basis=friendship', '?pageSize=201', '?page=0', '?catalogued=maybe']) expect((await get(getWorks, 'works', query)).status).toBe(422);
     expect((await get(getWorks, 'works', '', made.stranger)).status).toBe(404);
   });
 
@@ -70,6 +70,8 @@ describe('the ranking', () => {
     expect(await listed('?yearFrom=2009&yearTo=2012')).toEqual(['table', 'reed']);
     expect(await listed('?cluster=A')).toEqual(['table', 'book', 'reed']);
     expect(await listed('?cluster=none')).toEqual(['soil', 'note']);
+    expect(await listed('?off=A')).toEqual(['soil', 'ditch', 'wind', 'note']);
+    expect(await listed('?off=A,-')).toEqual(['ditch', 'wind']);
     expect(await listed('?cluster=A&basis=coupling')).toEqual([]);
     expect(await listed('?cluster=ZZ')).toEqual([]);
     expect(await listed('?catalogued=false')).toEqual(['book']);
