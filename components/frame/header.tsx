@@ -1,20 +1,9 @@
-import Link from 'next/link';
 import { type ReactNode } from 'react';
 
 import { AccountMenu, type AccountMenuProps } from '@/components/frame/account-menu';
+import { Brand } from '@/components/frame/brand';
 import { KeyboardHelp } from '@/components/frame/keyboard-help';
-import { Mark } from '@/components/frame/mark';
 import { SearchBox } from '@/components/frame/search-box';
-
-/** The mark and the name, as one link to the start. */
-export function Brand({ href = '/portfolios' }: { href?: string }) {
-  return (
-    <Link href={href} className="flex items-center gap-2.5 font-serif text-[1.5rem] leading-none font-medium text-ink no-underline">
-      <Mark />
-      Heddle
-    </Link>
-  );
-}
 
 interface HeaderProps extends AccountMenuProps {
   /** Another search box; the catalogue's unless given. */

@@ -18,7 +18,7 @@ export function DataTableHead<Row>({ columns, titleId, sort, onSort }: DataTable
       <tr role="row">
         {columns.map((column) => {
           const direction = sortDirection(sort, column.sort);
-          const look = clsx('inline-flex items-end gap-1 text-head font-semibold', column.numeric ? 'flex-row-reverse text-right' : 'text-left', direction ? 'text-ink' : 'text-ink-soft');
+          const look = clsx('inline-flex items-end gap-1 align-bottom text-head font-semibold', column.numeric ? 'flex-row-reverse text-right' : 'text-left', direction ? 'text-ink' : 'text-ink-soft');
           return (
             <th
               key={column.id}
