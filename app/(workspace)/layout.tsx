@@ -1,7 +1,8 @@
 import { type ReactNode } from 'react';
 
 import { signOut } from '@/app/(auth)/actions';
-import { WorkspaceHeader } from '@/components/access/workspace-header';
+import { Header } from '@/components/frame/header';
+import { MainRow } from '@/components/frame/section-row';
 import { actorForPage } from '@/lib/access/actor';
 import { roleMay } from '@/lib/access/permissions';
 
@@ -11,7 +12,8 @@ export default async function WorkspaceLayout({ children }: { children: ReactNod
   const sections = [{ href: '/portfolios', label: 'Portfolios' }, ...(roleMay(actor.role, 'user.manage') ? [{ href: '/admin', label: 'Administration' }] : [])];
   return (
     <>
-      <WorkspaceHeader name={actor.name} sections={sections} signOut={signOut} />
+      <Header person={{ name: actor.name, email: actor.email }} signOut={signOut} />
+      <MainRow items={sections} />
       <main id="main">{children}</main>
     </>
   );

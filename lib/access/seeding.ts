@@ -1,18 +1,13 @@
 import { hashPassword } from '@/lib/access/passwords';
 import { type Role } from '@/lib/access/permissions';
+import { demonstrationPeople } from '@/lib/demonstration/accounts';
 import { environment } from '@/lib/environment';
 import { User } from '@/models/user';
 
 /** Printed at the start and shown on the sign-in page of a demonstration; of no use elsewhere. */
 export const demonstrationPassword = 'linen-and-indigo';
 
-export const demonstrationAccounts: readonly { email: string; name: string; role: Role }[] = [
-  { email: 'admin@tarnholm.example', name: 'Ada Holm', role: 'administrator' },
-  { email: 'librarian@tarnholm.example', name: 'Liv Brandt', role: 'librarian' },
-  { email: 'evaluator@tarnholm.example', name: 'Emil Varga', role: 'evaluator' },
-  { email: 'author@tarnholm.example', name: 'Anna Lindqvist', role: 'author' },
-  { email: 'reader@tarnholm.example', name: 'Ruben Okafor', role: 'reader' },
-];
+export const demonstrationAccounts: readonly { email: string; name: string; role: Role }[] = demonstrationPeople;
 
 /**
  * Makes the demonstration's accounts where they are missing and gives the ids by role. Null where the demonstration does not belong:

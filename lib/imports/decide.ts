@@ -7,7 +7,7 @@ import { run } from '@/lib/db/bulk';
 import { conflict } from '@/lib/errors';
 import { moveImportOrRefuse } from '@/lib/imports/states';
 import { enqueue, requestCancel } from '@/lib/jobs/queue';
-import { Import } from '@/models/import';
+import { type Import } from '@/models/import';
 
 async function claiming<Result>(row: Import, work: (transaction: Transaction) => Promise<Result>): Promise<Result> {
   try {

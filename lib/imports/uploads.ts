@@ -15,7 +15,7 @@ import { Import } from '@/models/import';
 /** A file name as a person may see it: no path, no control characters, at most 255 characters. */
 export function cleanFileName(name: string): string {
   const bare = name.split(/[\\/]/).pop() ?? '';
-  // eslint-disable-next-line no-control-regex -- control characters are exactly what must not reach a page or a header
+   
   const clean = bare.replace(/[\u0000-\u001f\u007f\u202a-\u202e\u2066-\u2069]/g, '').trim().slice(0, 255);
   return clean || 'unnamed';
 }

@@ -7,7 +7,7 @@ import { acceptImport, undoImport } from '@/lib/imports/decide';
 import { claim } from '@/lib/jobs/queue';
 import { runJob } from '@/lib/jobs/run-job';
 import { type Actor } from '@/lib/access/permissions';
-import { Import } from '@/models/import';
+import { type Import } from '@/models/import';
 import { Job } from '@/models/job';
 
 /** Does in this process what the worker does, until the queue is empty. */
