@@ -31,12 +31,12 @@ export function ImportActions({ row, onChanged }: { row: ImportView; onChanged: 
   const { state } = row;
   const waits = state === 'review' || state === 'set-aside' || state === 'undone';
   return (
-    <div className="grid justify-items-end gap-2">
-      <div className="flex flex-wrap justify-end gap-2">
-        {(waits || state === 'failed') && <ReadAgain row={row} onRead={onChanged} />}
+    <div className="grid gap-2 sm:justify-items-end">
+      <div className="flex flex-wrap gap-2 sm:justify-end">
         {(state === 'uploaded' || state === 'reading' || state === 'checking') && <Button disabled={sending !== null} onClick={() => act('cancel')}>Stop reading</Button>}
         {(state === 'review' || state === 'failed') && <Button disabled={sending !== null} onClick={() => act('set-aside')}>Set aside</Button>}
         {waits && acceptable > 0 && <Button kind="primary" disabled={sending !== null} onClick={() => act('accept')}>Accept {formatNumber(acceptable)} now</Button>}
+        {(waits || state === 'failed') && <ReadAgain row={row} onRead={onChanged} />}
         {state === 'accepted' && !isUndoing(row) && <Button disabled={sending !== null} onClick={() => act('undo')}>Undo import</Button>}
       </div>
       {problem && <Notice tone="problem">{problem}</Notice>}

@@ -32,7 +32,7 @@ export function ReadAgain({ row, onRead }: { row: ImportView; onRead: (row: Impo
   };
   return (
     <>
-      <Button kind="quiet" onClick={() => setOpen(true)}>Read it otherwise</Button>
+      <Button kind="quiet" className="sm:order-first" onClick={() => setOpen(true)}>Read it otherwise</Button>
       <Dialog open={open} onOpenChange={setOpen} title="Read the file again" description="In another format or encoding than was found. Answers to matches of this file are asked anew.">
         <form onSubmit={submit} className="grid gap-4">
           {problem && <FormError>{problem}</FormError>}

@@ -9,7 +9,7 @@ import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { FormError } from '@/components/ui/field';
 import { Icon } from '@/components/ui/icons';
-import { ApiProblem, messageOf, send } from '@/lib/api/client';
+import { ApiProblem, formMessage, messageOf, send } from '@/lib/api/client';
 import { type PortfolioView, type UnitView } from '@/lib/api/types';
 
 /** The button and the form behind it. What was typed stays when the dialog is closed or the service refuses. */
@@ -42,7 +42,7 @@ export function NewPortfolio({ units }: { units: (UnitView & { depth: number })[
       </Button>
       <Dialog open={open} onOpenChange={setOpen} title="New portfolio" description="A set of works of a unit, a project or a question. You manage it; give it to others now or later.">
         <form onSubmit={submit} className="grid gap-4" noValidate>
-          {problem && <FormError>{problem instanceof ApiProblem ? problem.message : problem}</FormError>}
+          {problem && <FormError>{formMessage(problem)}</FormError>}
           <PortfolioFields draft={draft} onChange={setDraft} errors={errors} units={units} />
           <PeopleField people={people} onChange={setPeople} error={Object.entries(errors).find(([field]) => field.startsWith('grants'))?.[1]} />
           <div className="flex justify-end gap-2">

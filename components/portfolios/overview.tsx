@@ -44,7 +44,7 @@ export function Overview({ initial, units, may }: OverviewProps) {
   const chosen = search.get('evidence');
   const figure = isFigure(chosen) ? chosen : null;
   const dated = portfolio.years.reduce((sum, one) => sum + one.works, 0);
-  const facts = [portfolio.unit?.name, periodWords(portfolio.periodFrom, portfolio.periodTo), count(portfolio.imports.accepted, 'accepted import')].filter(Boolean);
+  const facts = [portfolio.unit?.name, periodWords(portfolio.periodFrom, portfolio.periodTo), portfolio.imports.accepted > 0 ? count(portfolio.imports.accepted, 'accepted import') : 'nothing accepted yet'].filter(Boolean);
   return (
     <SheetWithEvidence evidence={figure && <Evidence figure={figure} portfolio={portfolio} />}>
       <div className="grid max-w-[66rem] gap-8">

@@ -39,7 +39,7 @@ export function PortfolioFields({ draft, onChange, errors, units }: PortfolioFie
           <option key={unit.id} value={unit.id}>{`${'\u2003'.repeat(unit.depth)}${unit.name}`}</option>
         ))}
       </SelectField>
-      <div className="grid grid-cols-2 gap-3">
+      <div className="grid grid-cols-2 items-start gap-3">
         <TextField label="Period from" value={draft.periodFrom} onChange={set('periodFrom')} error={errors.periodFrom} inputMode="numeric" placeholder="first year" autoComplete="off" />
         <TextField label="to" value={draft.periodTo} onChange={set('periodTo')} error={errors.periodTo} inputMode="numeric" placeholder="last year" autoComplete="off" />
       </div>

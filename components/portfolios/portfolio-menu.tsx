@@ -9,7 +9,7 @@ import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { FormError } from '@/components/ui/field';
 import { Menu, MenuItem, MenuSeparator } from '@/components/ui/menu';
-import { ApiProblem, messageOf, send } from '@/lib/api/client';
+import { ApiProblem, formMessage, messageOf, send } from '@/lib/api/client';
 import { type PortfolioDetail, type UnitView } from '@/lib/api/types';
 
 interface PortfolioMenuProps {
@@ -69,7 +69,7 @@ export function PortfolioMenu({ portfolio, units, onChanged }: PortfolioMenuProp
     void attempt(() => send('PUT', `/api/portfolios/${portfolio.id}/grants`, { grants: people.map(({ userId, level }) => ({ userId, level })) }), saved);
   };
   const remove = () => void attempt(() => send('DELETE', `/api/portfolios/${portfolio.id}`), () => router.push(`/portfolios?deleted=${portfolio.id}`));
-  const message = problem && <FormError>{problem instanceof ApiProblem ? problem.message : problem}</FormError>;
+  const message = problem && <FormError>{formMessage(problem)}</FormError>;
   const buttons = (
     <div className="flex justify-end gap-2">
       <Button kind="quiet" onClick={() => setOpen(null)}>Cancel</Button>

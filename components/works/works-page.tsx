@@ -37,7 +37,7 @@ function columnsOf(selection: ReturnType<typeof useSelection> | null, pageIds: s
           cell: (work: WorkListItem) => <input type="checkbox" aria-label={`Choose ${titleOf(work)}`} className={box} checked={chosen.has(work.id)} onChange={(event) => toggle([work.id], event.target.checked)} />,
         }]
       : []),
-    { id: 'title', head: 'Work', sort: 'title', fixed: true, narrow: 'title', cell: (work) => <WorkLine work={work} /> },
+    { id: 'title', head: 'Work', sort: 'title', fixed: true, narrow: 'title', cell: (work) => <WorkLine work={work} yearElsewhere /> },
     { id: 'year', head: 'Year', sort: 'year', highestFirst: true, numeric: true, width: '5rem', cell: (work) => work.year ?? '–' },
     { id: 'type', head: 'Type', width: '8rem', hiddenAtFirst: true, cell: (work) => typeWords[work.type] },
     { id: 'references', head: 'References', sort: 'references', highestFirst: true, numeric: true, width: '7rem', cell: (work) => (work.references > 0 ? <Link href={`/works/${work.id}#references`} aria-label={`${formatNumber(work.references)} references of ${titleOf(work)}`}>{formatNumber(work.references)}</Link> : '0') },

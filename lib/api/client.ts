@@ -48,6 +48,12 @@ export async function send<Result>(method: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'D
 /** The fetcher of every SWR hook. */
 export const fetchJson = <Result>(path: string): Promise<Result> => send<Result>('GET', path);
 
+/** Words for the head of a form: where the service names fields, those carry the messages. */
+export function formMessage(problem: ApiProblem | string): string {
+  if (typeof problem === 'string') return problem;
+  return problem.message.startsWith('The body cannot be used') ? 'Nothing was saved yet. Look at the marked fields.' : problem.message;
+}
+
 /** Words for any error that an event handler caught. */
 export function messageOf(error: unknown): string {
   return error instanceof ApiProblem ? error.message : 'Something went wrong in this page. Nothing is lost; load it again.';
