@@ -45,11 +45,12 @@ export interface Pages {
 /** "123-9" -> 123 and 129; "1--10", "e123", "S5-S9", "12, 15-17" -> 12. */
 export function parsePages(text: string): Pages {
   const clean = text.slice(0, 1_000).replace(/^\s*(?:pp?|pages?)\b\.?\s*/i, '').trim();
-  if (clean === '') return {};
+  // "xxi + 554" counts the pages of a book.
+  if (clean === '' || /^[ivxlcdm]{1,12}\s*\+\s*\d/i.test(clean)) return {};
   const match = /^([^\s,;–—‐-]{1,40})\s*(?:-{1,3}|[–—‐])\s*([^\s,;–—‐-]{1,40})/.exec(clean);
   if (!match) {
     const [only] = clean.split(/[,;]/);
-    return only.trim() === '' ? {} : { firstPage: only.trim().slice(0, 60) };
+    return only.trim() === '' ? {} : { firstPage: only.trim().replace(/\+{1,3}$/, '').slice(0, 60) };
   }
   const [, firstPage, last] = match;
   return { firstPage, lastPage: expand(firstPage, last) };

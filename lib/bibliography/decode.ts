@@ -50,9 +50,15 @@ export function createUtf8Validator(): { push(chunk: Uint8Array): boolean; end()
 export function createDecoder(encoding: string): { write(chunk: Uint8Array): string; end(): string } {
   const decoder = new TextDecoder(encoding);
   let pending = '';
+  let begun = false;
   const settle = (text: string, last: boolean): string => {
     let whole = pending + text;
     pending = '';
+    if (!begun && whole !== '') {
+      begun = true;
+      // A file with the mark of UTF-8 that is none keeps the mark's three bytes as letters.
+      if (whole.startsWith('ï»¿')) whole = whole.slice(3);
+    }
     // A CR at the end of a chunk may be half of a CRLF.
     if (!last && whole.endsWith('\r')) {
       pending = '\r';

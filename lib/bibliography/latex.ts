@@ -65,6 +65,12 @@ class TexText {
     }
     this.at += match[0].length;
     const [, word, sign] = match;
+    // \a'o is what \'o becomes within a tabbing environment.
+    if (word === 'a' && match[0].length === 2 && "'`=".includes(text[this.at] ?? ' ')) {
+      this.marks = (accents.get(text[this.at]) as string) + this.marks.slice(0, 3);
+      this.at += 1;
+      return;
+    }
     const accent = accents.get(word ?? sign);
     if (accent !== undefined && (sign !== undefined || word.length === 1 || text[this.at] === '{')) {
       // Three marks on one letter are real (Vietnamese, transliterations); a thousand are not.

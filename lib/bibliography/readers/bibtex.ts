@@ -18,6 +18,8 @@ const mostWaiting = 120_000_000;
 const longestChain = 6;
 const mostParents = 20;
 const mostInherited = 300;
+/** Parents looked up in one file: real files stay far below, built ones would take minutes. */
+const mostInheritances = 1_000_000;
 const mildFaults = new Set(['undefined-abbreviation', 'repeated-field', 'comma-expected', 'quote-in-value', 'field-expected']);
 
 interface Held {
@@ -38,6 +40,7 @@ class BibtexReader implements Reader {
   private held: Held[] = [];
   private waiting = 0;
   private nextPosition = 0;
+  private inheritances = 0;
 
   constructor(private readonly options: ReaderOptions) {
     this.session = new ReadSession('bibtex', options);
@@ -120,6 +123,11 @@ class BibtexReader implements Reader {
     for (const { key, whole } of visited.length > 1 ? sources.slice(0, visited.length > 2 ? 1 : 4) : sources) {
       const name = key.trim().toLowerCase();
       if (name === '') continue;
+      this.inheritances += 1;
+      if (this.inheritances > mostInheritances) {
+        builder.problem('error', 'inheritance-too-wide', 'The entries of the file inherit from each other beyond measure; this one was left as it stands.');
+        return merged;
+      }
       const parent = this.parents.get(name);
       if (visited.includes(name)) builder.problem('warning', 'inheritance-loop', `"${key.trim().slice(0, 60)}" inherits from itself; the loop was cut.`);
       else if (!parent) builder.problem('warning', 'parent-missing', `"${key.trim().slice(0, 60)}", from which this entry inherits, is not in the file.`);

@@ -28,7 +28,8 @@ export class EntryBuilder {
   readonly problems: Problem[] = [];
   readonly fields: RecordFields = { type: 'other', authors: [], identifiers: {}, references: [] };
   key: string | undefined;
-  private readonly told = new Set<string>();
+  /** Made when first needed: most entries have no problem. */
+  private told: Set<string> | null = null;
   private otherFields = 0;
 
   constructor(readonly line: number, readonly limits: ReadLimits) {}
@@ -45,6 +46,7 @@ export class EntryBuilder {
 
   /** A problem that is told once for an entry, however often it occurs. */
   private problemOnce(code: string, message: string, line = this.line): void {
+    this.told ??= new Set();
     if (this.told.has(code)) return;
     this.told.add(code);
     this.problem('error', code, message, line);
@@ -53,7 +55,8 @@ export class EntryBuilder {
   /** Sets those fields that have a value; text is tidied. */
   set(values: Partial<RecordFields>): void {
     const fields = this.fields as unknown as Record<string, unknown>;
-    for (const [name, value] of Object.entries(values)) {
+    for (const name in values) {
+      const value = values[name as keyof RecordFields];
       const tidy = typeof value === 'string' ? tidyText(value) : value;
       if (tidy !== undefined && tidy !== '') fields[name] = tidy;
     }
@@ -62,7 +65,10 @@ export class EntryBuilder {
   /** Sets those identifiers that have a value and are not known yet. */
   identify(values: Partial<Identifiers>): void {
     const identifiers = this.fields.identifiers as unknown as Record<string, unknown>;
-    for (const [name, value] of Object.entries(values)) if (value !== undefined && value !== '' && identifiers[name] === undefined) identifiers[name] = value;
+    for (const name in values) {
+      const value = values[name as keyof Identifiers];
+      if (value !== undefined && value !== '' && identifiers[name] === undefined) identifiers[name] = value;
+    }
   }
 
   /** Cuts a field at the limit and says so. */

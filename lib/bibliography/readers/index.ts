@@ -2,11 +2,13 @@ import { defaultLimits, type Entry, type Format, type Problem, type ReadLimits, 
 import { type Reader } from '@/lib/bibliography/readers/builder';
 import { createBibtexReader } from '@/lib/bibliography/readers/bibtex';
 import { createCslJsonReader } from '@/lib/bibliography/readers/csl-json';
+import { createNbibReader } from '@/lib/bibliography/readers/nbib';
+import { createReferReader } from '@/lib/bibliography/readers/refer';
 import { createRegistryJsonReader } from '@/lib/bibliography/readers/registry-json';
 import { createRisReader } from '@/lib/bibliography/readers/ris';
 import { createTaggedReader } from '@/lib/bibliography/readers/tagged';
 
-const readers = { bibtex: createBibtexReader, ris: createRisReader, tagged: createTaggedReader, 'csl-json': createCslJsonReader, 'registry-json': createRegistryJsonReader };
+const readers = { bibtex: createBibtexReader, ris: createRisReader, tagged: createTaggedReader, 'csl-json': createCslJsonReader, 'registry-json': createRegistryJsonReader, nbib: createNbibReader, refer: createReferReader };
 
 /**
  * A reader of one format: text in (LF line ends), entries out as soon as they are complete.
@@ -21,7 +23,7 @@ export function createReader(format: Format, handlers: { onEntry: (entry: Entry)
 export function readText(format: Format, text: string, limits?: Partial<ReadLimits>): { entries: Entry[]; summary: ReadSummary } {
   const entries: Entry[] = [];
   const reader = createReader(format, { onEntry: (entry) => entries.push(entry), onProblem: () => undefined, limits });
-  reader.write(text.replace(/\r\n?/g, '\n'));
+  reader.write(text.includes('\r') ? text.replace(/\r\n?/g, '\n') : text);
   const summary = reader.end();
   return { entries: entries.sort((a, b) => a.position - b.position), summary };
 }

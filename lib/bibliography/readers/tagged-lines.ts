@@ -32,10 +32,10 @@ export class TaggedValues {
   }
 
   /** First value that is not empty, of the first tag that has one. */
-  first(...tags: string[]): (TaggedValue & { tag: string }) | undefined {
+  first(...tags: string[]): TaggedValue | undefined {
     for (const tag of tags) {
-      const found = this.byTag.get(tag)?.find((value) => value.text !== '');
-      if (found) return { ...found, tag };
+      const values = this.byTag.get(tag);
+      if (values) for (const value of values) if (value.text !== '') return value;
     }
     return undefined;
   }
@@ -144,5 +144,5 @@ export abstract class TaggedLineReader {
 /** Text of the first tag that has a value, cut at the limit. */
 export function boundedText(builder: EntryBuilder, values: TaggedValues, ...tags: string[]): string | undefined {
   const found = values.first(...tags);
-  return found ? builder.bounded(found.text, found.tag, found.line) : undefined;
+  return found ? builder.bounded(found.text, tags.join('/'), found.line) : undefined;
 }
