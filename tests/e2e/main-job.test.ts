@@ -1,0 +1,96 @@
+import { type Browser } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+
+import { makeFiles } from '@/tests/e2e/files';
+import { emailOf, launch, serviceUrl, signIn, watchFaults } from '@/tests/e2e/service';
+
+let browser: Browser;
+beforeAll(async () => {
+  browser = await launch();
+});
+afterAll(() => browser.close());
+
+describe('the main job in a browser', () => {
+  it('goes from dropped files to ranking, work and map, with two people', async () => {
+    const stamp = `web${Date.now().toString(36)}`;
+    const name = `Lowland waters ${stamp}`;
+    const librarianContext = await browser.newContext({ viewport: { width: 1440, height: 900 } });
+    const page = await signIn(librarianContext, 'librarian');
+    const faults = watchFaults(page);
+
+    // A portfolio, given to the evaluator at once.
+    await page.getByRole('button', { name: 'New portfolio' }).click();
+    await page.getByLabel('Name', { exact: true }).fill(name);
+    await page.getByLabel('Find somebody by name or e-mail').fill(emailOf('evaluator'));
+    await page.getByRole('list', { name: 'People found' }).getByRole('button').first().click();
+    await page.getByRole('button', { name: 'Make portfolio' }).click();
+    await page.getByRole('heading', { level: 1, name }).waitFor();
+    const portfolioUrl = page.url().split('?')[0];
+
+    // Files in four formats; reading goes on while the page is loaded anew.
+    await page.goto(`${portfolioUrl}/imports`);
+    const files = makeFiles(stamp);
+    await page.getByLabel('Files to import').setInputFiles(files);
+    for (const file of files) await page.getByRole('link', { name: file.name }).first().waitFor();
+    await page.reload();
+    for (const file of files) {
+      await page.goto(`${portfolioUrl}/imports`);
+      await page.getByRole('link', { name: file.name }).first().click();
+      await page.getByRole('heading', { level: 1, name: file.name }).waitFor();
+      // The summary stands before anything is catalogued.
+      await page.getByText('nothing is catalogued until you accept').waitFor();
+      await page.getByRole('button', { name: /^Accept \d+ now$/ }).click();
+      await page.getByRole('button', { name: 'Undo import' }).waitFor({ timeout: 60_000 });
+    }
+    // The last one is undone again; it can be accepted once more.
+    await page.getByRole('button', { name: 'Undo import' }).click();
+    await page.getByRole('button', { name: /^Accept \d+ now$/ }).waitFor({ timeout: 60_000 });
+    await page.goto(`${portfolioUrl}/works`);
+    await page.getByRole('row').nth(5).waitFor();
+    await librarianContext.close();
+
+    // The evaluator runs an analysis and reads it.
+    const evaluatorContext = await browser.newContext({ viewport: { width: 1440, height: 900 } });
+    const evaluator = await signIn(evaluatorContext, 'evaluator');
+    faults.push(...watchFaults(evaluator));
+    await evaluator.goto(`${portfolioUrl}/analyses/new`);
+    await evaluator.getByLabel('Least citations of a cited-only work').fill('2');
+    await evaluator.getByLabel('Resamples for rank intervals').fill('50');
+    await evaluator.getByRole('button', { name: 'Start the analysis' }).click();
+    await evaluator.getByRole('link', { name: 'Rankings', exact: true }).last().waitFor({ timeout: 90_000 });
+    await evaluator.goto(`${portfolioUrl}/rankings`);
+    await evaluator.getByRole('heading', { level: 1 }).waitFor();
+    const rows = evaluator.locator('tbody tr');
+    await rows.nth(3).waitFor();
+    const sorter = evaluator.getByRole('columnheader', { name: /Citations here/ });
+    await sorter.getByRole('button').or(sorter.getByRole('link')).first().click();
+    await evaluator.waitForURL(/sort=-?inDegree/);
+    // A figure opens its evidence: file and line of the references behind it.
+    await evaluator.getByRole('link', { name: /^Citations here: \d+\. Open the evidence/ }).first().click();
+    await evaluator.getByText(new RegExp(`${stamp}\\.txt`)).first().waitFor();
+
+    await evaluator.getByRole('link', { name: new RegExp(`in the ${stamp} basin`) }).first().click();
+    await evaluator.waitForURL(/\/works\/\d+/);
+    await evaluator.getByRole('heading', { level: 1, name: new RegExp(stamp) }).waitFor();
+
+    await evaluator.goto(`${portfolioUrl}/map?basis=citation`);
+    await evaluator.locator('canvas').first().waitFor({ timeout: 60_000 });
+    await evaluator.getByRole('heading', { name: 'Map of works' }).waitFor();
+    expect(faults).toEqual([]);
+    await evaluatorContext.close();
+  });
+
+  it('shows a reader what was given and nothing to change it with', async () => {
+    const context = await browser.newContext();
+    const page = await signIn(context, 'reader');
+    await page.getByRole('link', { name: /Faculty of Water and Land/ }).first().click();
+    await page.getByRole('heading', { level: 1, name: /Faculty of Water and Land/ }).waitFor();
+    const portfolioUrl = page.url().split('?')[0];
+    await page.goto(`${portfolioUrl}/imports`);
+    await page.getByRole('heading', { level: 1 }).waitFor();
+    expect(await page.getByRole('button', { name: 'Choose files' }).count()).toBe(0);
+    const other = await page.goto(`${serviceUrl}/admin`);
+    expect(other?.status()).toBe(404);
+    await context.close();
+  });
+});
