@@ -13,6 +13,7 @@ export const longestReference = 10_000;
 const anonymous = /^[[*]?anon(?:ymous)?\.?\]?$/i;
 const yearPart = /^\(?(\d{4})[a-z]?\)?$/;
 const initialsPart = /^(?:\p{Lu}\.?[-\s]?){1,5}$/u;
+const namePart = /^\p{Lu}[\p{L}\p{M}.'’ -]{0,40}$/u;
 const volumePart = /^V(?:ol)?\.?\s?([A-Z]{0,2}\d[\w./-]{0,20}|[IVXLC]{1,8})$/i;
 const pagePart = /^PP?\.?\s?([a-z]{0,3}\d[\w./-]{0,20})$/i;
 const articlePart = /^(?:ARTN|ART|ARTICLE)\.?\s?(?:NO\.?\s?|NUMBER\s?)?([a-z]{0,3}\d[\w./-]{0,20})$/i;
@@ -67,8 +68,8 @@ function takeAuthorAndYear(reference: CitedReference, parts: string[]): number {
   if (parts.length === 0) return 0;
   let taken = 0;
   if (yearOf(parts[0]) === undefined) {
-    // "de Vries, J., 1990, ...": initials after a comma belong to the author.
-    const withInitials = parts.length > 2 && initialsPart.test(parts[1]) && yearOf(parts[1]) === undefined && (yearOf(parts[2]) !== undefined || !/^V\.?$/i.test(parts[1]));
+    // "de Vries, J., 1990, ..." and "Kuhn, Thomas, 1962, ...": what stands between the first part and the year belongs to the author.
+    const withInitials = parts.length > 2 && yearOf(parts[1]) === undefined && (yearOf(parts[2]) !== undefined ? namePart.test(parts[1]) : initialsPart.test(parts[1]) && !/^V\.?$/i.test(parts[1]));
     const author = withInitials ? `${parts[0]}, ${parts[1]}` : parts[0];
     const count = withInitials ? 2 : 1;
     const placeFollows = volumePart.test(parts[count] ?? '') || pagePart.test(parts[count] ?? '');
@@ -77,7 +78,8 @@ function takeAuthorAndYear(reference: CitedReference, parts: string[]): number {
     taken = count;
     if (!anonymous.test(author)) {
       reference.author = author;
-      const family = familyOf(author);
+      // "SMITH J, JONES K, 1990": initials before the comma close the first name.
+      const family = familyOf(/\s\p{Lu}{1,3}$/u.test(parts[0]) ? parts[0] : author);
       if (family) reference.family = family;
     }
   }

@@ -3,7 +3,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 
 import { createReader, readText } from '@/lib/bibliography/readers';
-import { defaultLimits, formats, type Entry, type Format } from '@/lib/bibliography/record';
+import { formats, type Entry, type Format, type ReadLimits } from '@/lib/bibliography/record';
 import { corpus } from '@/tests/unit/bibliography/corpus';
 
 const runs = 150;
@@ -143,7 +143,7 @@ describe('every reader, on hostile files', () => {
   });
 
   it('tells when a limit cut something off', () => {
-    const codes = (format: Format, text: string, limits: Partial<typeof defaultLimits>) => readText(format, text, limits).entries.flatMap((entry) => entry.problems.map((problem) => problem.code));
+    const codes = (format: Format, text: string, limits: Partial<ReadLimits>) => readText(format, text, limits).entries.flatMap((entry) => entry.problems.map((problem) => problem.code));
     expect(codes('bibtex', '@a{k, author={A and B and C and D}}', { authors: 2 })).toContain('too-many-authors');
     expect(codes('bibtex', `@a{k, title={${'x'.repeat(50)}}}`, { fieldLength: 20 })).toContain('field-too-long');
     expect(codes('tagged', 'PT J\nTI a\nCR A, 2001, X\n   B, 2001, Y\n   C, 2001, Z\nER\n', { references: 2 })).toContain('too-many-references');
