@@ -143,8 +143,9 @@ function findUnstructuredYear(text: string): number | undefined {
   return findYear(withoutDoi);
 }
 
-/** A line whose layout is not known beforehand: the comma layout where it fits, running text else. */
+/** A line whose layout is not known beforehand: the comma layout where a year or volume and page stand in their places, running text else. */
 export function parseAnyReference(raw: string, line: number): CitedReference {
   const found = parseCitedLine(raw, line);
-  return found.unstructured || (found.year === undefined && !found.volume && !found.page && !found.doi) ? parseUnstructured(raw, line) : found;
+  const fits = !found.unstructured && (found.year !== undefined || (found.volume !== undefined && found.page !== undefined));
+  return fits ? found : parseUnstructured(raw, line);
 }
