@@ -57,7 +57,7 @@ describe('the main job in a browser', () => {
     await evaluator.getByLabel('Least citations of a cited-only work').fill('2');
     await evaluator.getByLabel('Resamples for rank intervals').fill('50');
     await evaluator.getByRole('button', { name: 'Start the analysis' }).click();
-    await evaluator.getByRole('link', { name: 'Rankings', exact: true }).last().waitFor({ timeout: 90_000 });
+    await evaluator.locator('a[href*="rankings?analysis="]').first().waitFor({ timeout: 90_000 });
     await evaluator.goto(`${portfolioUrl}/rankings`);
     await evaluator.getByRole('heading', { level: 1 }).waitFor();
     const rows = evaluator.locator('tbody tr');
