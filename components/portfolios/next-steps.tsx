@@ -1,3 +1,5 @@
+import Link from 'next/link';
+
 import { ButtonLink } from '@/components/ui/button';
 import { DateText } from '@/components/ui/date-text';
 import { count } from '@/components/ui/numbers';
@@ -24,8 +26,8 @@ export function stepsOf(portfolio: PortfolioDetail, mayImport: boolean, mayAnaly
     steps.push({ title: `${count(portfolio.openMatches, 'match', 'matches')} to review`, text: 'Works that may be one and the same. They stand apart until somebody answers, one key an answer.', href: `${base}/imports/matches`, action: 'Review matches' });
   }
   const analysis = portfolio.latestAnalysis;
-  if (portfolio.works > 0 && analysis === null && mayAnalyse) steps.push({ title: 'Run an analysis', text: 'Rankings, clusters and maps of these works and of what they cite. The defaults are good.', href: `${base}/rankings`, action: 'Analyse' });
-  if (analysis?.state === 'failed' && mayAnalyse) steps.push({ title: 'The last analysis failed', text: analysis.error ?? 'No reason was given.', href: `${base}/rankings`, action: 'Open' });
+  if (portfolio.works > 0 && analysis === null && mayAnalyse) steps.push({ title: 'Run an analysis', text: 'Rankings, clusters and maps of these works and of what they cite. The defaults are good.', href: `${base}/analyses/new`, action: 'Analyse' });
+  if (analysis?.state === 'failed' && mayAnalyse) steps.push({ title: 'The last analysis failed', text: analysis.error ?? 'No reason was given.', href: `${base}/analyses/${analysis.id}`, action: 'Open' });
   return steps;
 }
 
@@ -68,6 +70,7 @@ export function LatestAnalysis({ portfolio }: { portfolio: PortfolioDetail }) {
             <ButtonLink href={`${base}/rankings`}>Rankings</ButtonLink>
             <ButtonLink href={`${base}/clusters`}>Clusters</ButtonLink>
             <ButtonLink href={`${base}/map`}>Map</ButtonLink>
+            <ButtonLink href={`${base}/analyses/${analysis.id}`} kind="quiet">How it was made</ButtonLink>
           </div>
         </>
       ) : (
@@ -75,7 +78,7 @@ export function LatestAnalysis({ portfolio }: { portfolio: PortfolioDetail }) {
           {analysis.state === 'queued' && 'Waits to be computed.'}
           {analysis.state === 'running' && 'Is being computed; it is safe to leave.'}
           {analysis.state === 'cancelled' && 'Was cancelled.'}
-          {analysis.state === 'failed' && `Failed: ${analysis.error ?? 'no reason was given'}`} <a href={`${base}/rankings`}>Look at it</a>
+          {analysis.state === 'failed' && `Failed: ${analysis.error ?? 'no reason was given'}`} <Link href={`${base}/analyses/${analysis.id}`}>Look at it</Link>
         </p>
       )}
     </section>

@@ -15,7 +15,7 @@ export async function generateMetadata({ params }: Pick<LayoutProps, 'params'>):
   return { title: { default: `${row.name} · Heddle`, template: `%s · ${row.name} · Heddle` } };
 }
 
-const sections = [['', 'Overview'], ['/imports', 'Imports'], ['/works', 'Works'], ['/rankings', 'Rankings'], ['/clusters', 'Clusters'], ['/map', 'Map']] as const;
+const sections = [['', 'Overview'], ['/imports', 'Imports'], ['/works', 'Works'], ['/rankings', 'Rankings'], ['/clusters', 'Clusters'], ['/map', 'Map'], ['/analyses', 'Analyses']] as const;
 
 /** The row of sections below the header. A portfolio that the person was not given does not exist. */
 export default async function PortfolioLayout({ params, children }: LayoutProps) {
