@@ -3,7 +3,7 @@ export type Scheme = 'light' | 'dark';
 /** The cluster dyes of app/globals.css as numbers: WebGL and exported pictures cannot read custom properties. A test keeps both alike. */
 const dyes: Record<Scheme, readonly string[]> = {
   light: ['#3430c1', '#b93e15', '#c0c100', '#017c6e', '#b564bb', '#792713', '#5ab7f4', '#899a58', '#fd80ab', '#5d3c72'],
-  dark: ['#7f7bff', '#e2683d', '#d0d126', '#22a896', '#c982ce', '#b3604a', '#6cc1f7', '#a1b36d', '#fd92b7', '#9b76b4'],
+  dark: ['#6459ee', '#df6c5f', '#bae814', '#21a4a2', '#9058a5', '#b74859', '#76deff', '#abbd1c', '#feb5b1', '#d778f4'],
 };
 
 export interface Inks {
@@ -17,7 +17,7 @@ export interface Inks {
 }
 
 export const inks: Record<Scheme, Inks> = {
-  light: { ground: '#fffdf8', ink: '#20242b', inkSoft: '#565b63', thread: '#8b816d', none: '#b9b09b', selected: '#b98512', retracted: '#a23b2e' },
+  light: { ground: '#fffdf8', ink: '#20242b', inkSoft: '#565b63', thread: '#8b816d', none: '#b9b09b', selected: '#b58010', retracted: '#a23b2e' },
   dark: { ground: '#202329', ink: '#ece7db', inkSoft: '#b3b0a6', thread: '#7d8390', none: '#8d8676', selected: '#d3a43a', retracted: '#f0917f' },
 };
 

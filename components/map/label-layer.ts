@@ -3,7 +3,8 @@ import { inks, type Scheme } from '@/components/map/dyes';
 import { type Patch } from '@/components/map/patches';
 import { type AnalysisMap } from '@/lib/api/types';
 
-interface Box {
+/** A rectangle of the view, in pixels. */
+export interface Box {
   left: number;
   top: number;
   right: number;
@@ -25,16 +26,18 @@ interface LabelView {
   height: number;
   hidden: ReadonlySet<number>;
   scheme: Scheme;
+  /** Where no label may stand. */
+  taken: readonly Box[];
 }
 
 /**
  * Letters and names of clusters beside their patches. Larger clusters choose first: above the patch, below it, above with the letter alone;
  * a label that would lie on another is left out, since the legend has it.
  */
-export function drawClusterLabels(map: Pick<AnalysisMap, 'clusters'>, patches: readonly Patch[], { context, project, width, height, hidden, scheme }: LabelView): void {
+export function drawClusterLabels(map: Pick<AnalysisMap, 'clusters'>, patches: readonly Patch[], { context, project, width, height, hidden, scheme, taken: covered }: LabelView): void {
   const { ground, ink } = inks[scheme];
   const names = new Map(map.clusters.map((cluster) => [cluster.number, cluster]));
-  const taken: Box[] = [];
+  const taken: Box[] = [...covered];
   context.font = `600 15px "Newsreader Variable", Georgia, serif`;
   context.textAlign = 'center';
   context.textBaseline = 'alphabetic';

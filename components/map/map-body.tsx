@@ -66,6 +66,10 @@ export function MapBody({ map, head, portfolio, caution, provenance, mayExport }
     setSpoken(work === null ? 'Nothing selected.' : describeWork(map, work, neighbours[work].filter((near) => visible[near.work])));
     if (work !== null) renderer?.reveal(work);
   };
+  const find = (work: number) => {
+    select(work);
+    renderer?.flyTo(work);
+  };
   const walk = (arrow: Arrow) => {
     const next = selected < 0 ? firstWork(map, visible) : walkTo(map, selected, neighbours[selected], visible, arrow);
     if (next === null) setSpoken(selected < 0 ? 'No work is shown.' : 'No link leads that way.');
@@ -81,6 +85,7 @@ export function MapBody({ map, head, portfolio, caution, provenance, mayExport }
   const side = (
     <div className="grid content-start gap-5">
       {head}
+      <div className="max-lg:hidden"><MapSearch map={map} visible={visible} onFind={find} /></div>
       <MapLegend map={map} off={filters.off} onToggle={(off) => set({ off: [...off].join(',') })} onFind={(cluster) => renderer?.flyToCluster(cluster)} />
       <div className="grid gap-2 border-t border-thread pt-3">
         <p className="text-small text-ink-soft">
@@ -105,7 +110,7 @@ export function MapBody({ map, head, portfolio, caution, provenance, mayExport }
       <SheetWithEvidence bare evidence={panel || null} aside={<div className="p-5 max-lg:hidden lg:h-[calc(100dvh-6.4rem)] lg:overflow-y-auto">{side}</div>}>
         <div className="flex h-[calc(100dvh-6.4rem)] min-h-[26rem] flex-col">
           <div className="flex items-center gap-2 border-b border-thread px-4 py-2 md:px-6 lg:hidden">
-            <div className="min-w-0 flex-1"><MapSearch map={map} visible={visible} onFind={select} /></div>
+            <div className="min-w-0 flex-1"><MapSearch map={map} visible={visible} onFind={find} /></div>
             <Button onClick={() => setSheet(true)}>Clusters</Button>
           </div>
           <div className="relative min-h-0 flex-1">
@@ -130,18 +135,13 @@ export function MapBody({ map, head, portfolio, caution, provenance, mayExport }
                 onFailure={() => setStill(true)}
               />
             )}
-            {!asTable && (
-              <>
-                <div className="absolute top-4 left-4 w-72 max-lg:hidden"><MapSearch map={map} visible={visible} onFind={select} /></div>
-                {!still && <MapTools renderer={renderer} onTable={() => set({ view: 'table' })} />}
-              </>
-            )}
+            {!asTable && !still && <MapTools renderer={renderer} onTable={() => set({ view: 'table' })} />}
             <p id="map-spoken" role="status" aria-live="polite" className="sr-only">{spoken}</p>
           </div>
           <YearBrush years={years.years} undated={years.undated} from={filters.yearFrom} to={filters.yearTo} onChange={(from, to, done) => set({ yearFrom: from, yearTo: to }, done ? 'push' : 'replace')} />
         </div>
       </SheetWithEvidence>
-      <Sheet open={sheet} onOpenChange={setSheet} title="Clusters and filters">{side}</Sheet>
+      <Sheet open={sheet} onOpenChange={setSheet} title="Map of works">{side}</Sheet>
     </div>
   );
 }

@@ -55,7 +55,7 @@ export function MapLegend({ map, off, onToggle, onFind }: MapLegendProps) {
       </div>
       <ul className="text-table">
         {clusters.map((cluster) => (
-          <Row key={cluster.letter} letter={cluster.letter} number={cluster.number} label={labelOfCluster(cluster)} size={cluster.size} firmness={cluster.firmness} shown={!off.has(cluster.letter)} onChange={(shown) => toggle(cluster.letter, shown)} onFind={() => onFind(cluster.number)} />
+          <Row key={cluster.letter} letter={cluster.letter} number={cluster.number} label={labelOfCluster(cluster, 70)} size={cluster.size} firmness={cluster.firmness} shown={!off.has(cluster.letter)} onChange={(shown) => toggle(cluster.letter, shown)} onFind={() => onFind(cluster.number)} />
         ))}
         {outside > 0 && <Row letter="-" number={-1} label="In no cluster" size={outside} firmness={null} shown={!off.has('-')} onChange={(shown) => toggle('-', shown)} />}
       </ul>

@@ -33,7 +33,8 @@ function MapHead({ chosen, finished, latest, basis, mayRun }: MapPageProps) {
   return (
     <div className="grid gap-3">
       <div>
-        <h1 className="text-panel">Map of works</h1>
+        {/* The page has its h1 in any width; this head moves into a sheet where it is narrow. */}
+        <p aria-hidden="true" className="font-serif text-panel font-medium max-lg:hidden">Map of works</p>
         <p className="text-small text-ink-soft">Analysis of <DateText at={chosen.finishedAt ?? chosen.createdAt} /></p>
       </div>
       <AnalysisChooser chosen={chosen} finished={finished} />
@@ -50,6 +51,7 @@ export function MapPage(props: MapPageProps) {
   const { chosen, basis, mayRun } = props;
   const { data: map, error, isLoading, mutate } = useMap(chosen.id, basis);
   const head = <MapHead {...props} />;
+  const title = <h1 className="sr-only">Map of works</h1>;
   // Slow maps say so; quick ones do not flicker.
   const [slow, setSlow] = useState(false);
   useEffect(() => {
@@ -59,6 +61,7 @@ export function MapPage(props: MapPageProps) {
   if (error) {
     return (
       <div className="grid max-w-[40rem] gap-4 px-4 py-6 md:px-7">
+        {title}
         {head}
         <Notice tone="problem" title="The map could not be read" actions={<Button onClick={() => void mutate()}>Try again</Button>}>{error.message}</Notice>
       </div>
@@ -67,6 +70,7 @@ export function MapPage(props: MapPageProps) {
   if (!map || isLoading) {
     return (
       <div aria-busy="true" className="lg:flex lg:h-[calc(100dvh-6.4rem)]">
+        {title}
         <div className="grid content-start gap-4 border-thread p-5 lg:w-[18rem] lg:shrink-0 lg:border-r">
           {head}
           {Array.from({ length: 6 }, (_, row) => <Skeleton key={row} className="h-5" />)}
@@ -78,6 +82,7 @@ export function MapPage(props: MapPageProps) {
   if (map.ids.length === 0) {
     return (
       <div className="grid max-w-[40rem] gap-4 px-4 py-6 md:px-7">
+        {title}
         {head}
         <EmptyState title="Nothing to draw on this basis" action={mayRun && <ButtonLink href={`/portfolios/${chosen.portfolioId}/analyses/new?like=${chosen.id}`}>New analysis</ButtonLink>}>
           No two works are linked in this way. Another basis may show more, or an analysis with fewer citations asked of cited-only works.
@@ -85,5 +90,10 @@ export function MapPage(props: MapPageProps) {
       </div>
     );
   }
-  return <MapBody key={`${chosen.id} ${basis}`} {...props} map={map} head={head} />;
+  return (
+    <>
+      {title}
+      <MapBody key={`${chosen.id} ${basis}`} {...props} map={map} head={head} />
+    </>
+  );
 }

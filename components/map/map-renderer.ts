@@ -4,10 +4,10 @@ import { type Settings } from 'sigma/settings';
 import { type EdgeDisplayData, type NodeDisplayData } from 'sigma/types';
 
 import { drawDottedThreads, drawPatches, prepareCloth, type Cloth, type Project } from '@/components/map/cloth-layer';
-import { dyeOf, inks, mixed, withOpacity, type Scheme } from '@/components/map/dyes';
+import { dyeOf, inks, mixed, type Scheme } from '@/components/map/dyes';
 import { extentOf } from '@/components/map/extent';
 import { KnotProgram, type KnotLook } from '@/components/map/knot-program';
-import { drawClusterLabels, drawRetractions } from '@/components/map/label-layer';
+import { drawClusterLabels, drawRetractions, type Box } from '@/components/map/label-layer';
 import { type Patch } from '@/components/map/patches';
 import { isUncertain, knotSide, partThreads } from '@/components/map/threads';
 import { type AnalysisMap } from '@/lib/api/types';
@@ -129,7 +129,8 @@ export class MapRenderer {
     const { visible, selected } = this.view;
     const [source, target] = [map.links.source[thread.link], map.links.target[thread.link]];
     if (!visible[source] || !visible[target]) return { ...thread, hidden: true };
-    return { ...thread, color: withOpacity(dyeOf(map.cluster[source], this.scheme), selected >= 0 ? 0.12 : 0.34) };
+    // sigma adds half-transparent colours up where threads cross; mixed with the ground beforehand, they stay what they are.
+    return { ...thread, color: mixed(dyeOf(map.cluster[source], this.scheme), inks[this.scheme].ground, selected >= 0 ? 0.82 : 0.55) };
   }
 
   private readonly project: Project = (point) => this.sigma.graphToViewport(point);
@@ -137,8 +138,15 @@ export class MapRenderer {
   private listen(): void {
     const { onSelect, onHover, onCamera } = this.options;
     const { sigma } = this;
-    sigma.on('beforeRender', () => this.drawBelow());
-    sigma.on('afterRender', () => this.drawAbove());
+    // After it: a view that changed its size is emptied in the course of rendering.
+    sigma.on('afterRender', () => {
+      this.drawBelow();
+      this.drawAbove();
+    });
+    sigma.on('resize', () => {
+      this.hover(-1);
+      onHover(null, { x: 0, y: 0 });
+    });
     sigma.on('enterNode', ({ node }) => {
       this.hover(Number(node));
       onHover(this.hovered, this.placeOf(this.hovered));
@@ -186,7 +194,13 @@ export class MapRenderer {
     context.clearRect(0, 0, width, height);
     const retracted = map.retracted.flatMap((marked, work) => (marked && this.view.visible[work] ? [{ ...this.placeOf(work), half: this.halfOf(work) }] : []));
     drawRetractions(retracted, context, this.scheme);
-    drawClusterLabels(map, patches, { context, project: this.project, width, height, hidden: this.view.hiddenClusters, scheme: this.scheme });
+    drawClusterLabels(map, patches, { context, project: this.project, width, height, hidden: this.view.hiddenClusters, scheme: this.scheme, taken: this.covered() });
+  }
+
+  /** What lies over the map: its buttons. Labels keep clear of them. */
+  private covered(): Box[] {
+    const { width } = this.sigma.getDimensions();
+    return [{ left: width - 64, top: 0, right: width, bottom: 196 }];
   }
 
   private halfOf(work: number): number {
