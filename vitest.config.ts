@@ -26,7 +26,7 @@ export default defineConfig({
       },
       {
         resolve: { alias },
-        test: { name: 'e2e', include: ['tests/e2e/**/*.test.ts'], fileParallelism: false, pool: 'forks', testTimeout: 300_000, hookTimeout: 300_000 },
+        test: { name: 'e2e', include: ['tests/e2e/**/*.test.ts'], fileParallelism: false, pool: 'forks', testTimeout: 900_000, hookTimeout: 300_000 },
       },
     ],
   },
