@@ -9,3 +9,6 @@ interface Named {
 export function workName({ title, authors, year, venue }: Named): string {
   return title ?? ([authors, year, venue].filter((part) => part !== null && part !== undefined && part !== '').join(', ') || 'Untitled work');
 }
+
+/** Names of clusters are made from terms, which are lower case; on their own they begin with a capital. */
+export const clusterName = (name: string): string => name.charAt(0).toLocaleUpperCase('en') + name.slice(1);

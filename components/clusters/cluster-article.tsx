@@ -1,6 +1,6 @@
 import Link from 'next/link';
 
-import { workName } from '@/components/analyses/work-name';
+import { clusterName, workName } from '@/components/analyses/work-name';
 import { FirmnessRuler } from '@/components/clusters/firmness-ruler';
 import { ClusterSwatch } from '@/components/ui/cluster-swatch';
 import { count, formatDecimal, formatNumber, formatShare } from '@/components/ui/numbers';
@@ -25,8 +25,8 @@ export function ClusterArticle({ cluster, base, query }: ClusterArticleProps) {
   return (
     <article aria-labelledby={title} id={cluster.letter} className="grid scroll-mt-6 gap-x-8 gap-y-4 border-b border-thread py-5 lg:grid-cols-[minmax(15rem,5fr)_minmax(0,8fr)]">
       <div className="grid content-start gap-2.5">
-        <h2 id={title} className="text-panel first-letter:uppercase">
-          <ClusterSwatch index={cluster.number} letter={cluster.letter} name={cluster.name} />
+        <h2 id={title} className="text-panel">
+          <ClusterSwatch index={cluster.number} letter={cluster.letter} name={clusterName(cluster.name)} />
         </h2>
         <p className="text-table text-ink-soft">{count(cluster.size, 'work')} · {years(cluster)}</p>
         <div className="grid max-w-80 gap-1">

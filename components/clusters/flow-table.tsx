@@ -1,3 +1,4 @@
+import { clusterName } from '@/components/analyses/work-name';
 import { ClusterSwatch } from '@/components/ui/cluster-swatch';
 import { formatNumber } from '@/components/ui/numbers';
 import { Cell, ColumnHead, RowHead, Table, TableBody, TableHead } from '@/components/ui/table';
@@ -21,7 +22,7 @@ export function FlowTable({ clusters }: { clusters: readonly AnalysisClusterItem
             const sum = citing.citesClusters.reduce((total, one) => total + one.citations, 0);
             return (
               <tr key={citing.letter}>
-                <RowHead className="max-w-72 whitespace-nowrap"><ClusterSwatch index={citing.number} letter={citing.letter} name={citing.name} className="max-w-full overflow-hidden text-ellipsis" /></RowHead>
+                <RowHead className="max-w-72 whitespace-nowrap"><ClusterSwatch index={citing.number} letter={citing.letter} name={clusterName(citing.name)} className="max-w-full overflow-hidden text-ellipsis" /></RowHead>
                 {shown.map((cited) => {
                   const citations = citing.citesClusters.find((one) => one.letter === cited.letter)?.citations ?? 0;
                   const share = sum > 0 ? citations / sum : 0;

@@ -1,6 +1,7 @@
 import { type Project } from '@/components/map/cloth-layer';
 import { inks, type Scheme } from '@/components/map/dyes';
 import { type Patch } from '@/components/map/patches';
+import { clusterName } from '@/components/analyses/work-name';
 import { type AnalysisMap } from '@/lib/api/types';
 
 /** A rectangle of the view, in pixels. */
@@ -16,7 +17,7 @@ const meet = (a: Box, b: Box) => a.left < b.right && b.left < a.right && a.top <
 /** Name of a cluster as labels show it: "A · Peat carbon under drainage". */
 export function labelOfCluster({ letter, name }: { letter: string; name: string }, most = 40): string {
   const shown = name.length > most ? `${name.slice(0, most - 1).trimEnd()}…` : name;
-  return `${letter} · ${shown.charAt(0).toLocaleUpperCase()}${shown.slice(1)}`;
+  return `${letter} · ${clusterName(shown)}`;
 }
 
 interface LabelView {
@@ -38,7 +39,8 @@ export function drawClusterLabels(map: Pick<AnalysisMap, 'clusters'>, patches: r
   const { ground, ink } = inks[scheme];
   const names = new Map(map.clusters.map((cluster) => [cluster.number, cluster]));
   const taken: Box[] = [...covered];
-  context.font = `600 15px "Newsreader Variable", Georgia, serif`;
+  const narrow = width < 560;
+  context.font = `600 ${narrow ? 13 : 15}px "Newsreader Variable", Georgia, serif`;
   context.textAlign = 'center';
   context.textBaseline = 'alphabetic';
   context.lineJoin = 'round';
@@ -46,7 +48,7 @@ export function drawClusterLabels(map: Pick<AnalysisMap, 'clusters'>, patches: r
     const cluster = names.get(patch.cluster);
     if (!cluster || hidden.has(patch.cluster)) continue;
     const [top, bottom] = [project({ x: patch.top[0], y: patch.top[1] }), project({ x: patch.bottom[0], y: patch.bottom[1] })];
-    const whole = labelOfCluster(cluster);
+    const whole = labelOfCluster(cluster, narrow ? 18 : 40);
     const tries: [string, number, number][] = [[whole, top.x, top.y - 8], [whole, bottom.x, bottom.y + 20], [cluster.letter, top.x, top.y - 8]];
     for (const [text, x, y] of tries) {
       const half = context.measureText(text).width / 2 + 4;

@@ -108,7 +108,7 @@ export function MapBody({ map, head, portfolio, caution, provenance, mayExport }
   return (
     <div className="lg:h-[calc(100dvh-6.4rem)] lg:overflow-hidden lg:[&>div]:h-full">
       <SheetWithEvidence bare evidence={panel || null} aside={<div className="p-5 max-lg:hidden lg:h-[calc(100dvh-6.4rem)] lg:overflow-y-auto">{side}</div>}>
-        <div className="flex h-[calc(100dvh-6.4rem)] min-h-[26rem] flex-col">
+        <div className="flex h-[76dvh] min-h-[26rem] flex-col lg:h-[calc(100dvh-6.4rem)]">
           <div className="flex items-center gap-2 border-b border-thread px-4 py-2 md:px-6 lg:hidden">
             <div className="min-w-0 flex-1"><MapSearch map={map} visible={visible} onFind={find} /></div>
             <Button onClick={() => setSheet(true)}>Clusters</Button>

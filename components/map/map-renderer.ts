@@ -5,10 +5,9 @@ import { type EdgeDisplayData, type NodeDisplayData } from 'sigma/types';
 
 import { drawDottedThreads, drawPatches, prepareCloth, type Cloth, type Project } from '@/components/map/cloth-layer';
 import { dyeOf, inks, mixed, type Scheme } from '@/components/map/dyes';
-import { extentOf } from '@/components/map/extent';
 import { KnotProgram, type KnotLook } from '@/components/map/knot-program';
 import { drawClusterLabels, drawRetractions, type Box } from '@/components/map/label-layer';
-import { type Patch } from '@/components/map/patches';
+import { frameOf, type Patch } from '@/components/map/patches';
 import { isUncertain, knotSide, partThreads } from '@/components/map/threads';
 import { type AnalysisMap } from '@/lib/api/types';
 
@@ -54,6 +53,8 @@ export class MapRenderer {
   private scheme: Scheme;
   private view: MapView;
   private hovered = -1;
+  /** Knots shrink with the view, or a map on a telephone would be one heap. */
+  private knotScale = 1;
   private cameraTimer: ReturnType<typeof setTimeout> | undefined;
 
   constructor(container: HTMLElement, private readonly options: MapRendererOptions) {
@@ -64,9 +65,10 @@ export class MapRenderer {
     const threads = partThreads(map, mostThreads.within, mostThreads.between);
     this.between = threads.between;
     this.sigma = new Sigma<Knot, Thread>(this.makeGraph(threads.within), container, this.settings());
-    this.sigma.setCustomBBox(extentOf(map.x, map.y));
+    this.sigma.setCustomBBox(frameOf(map, patches));
     this.contexts = { cloth: this.addLayer('cloth', { beforeLayer: 'edges' }), names: this.addLayer('names', { afterLayer: 'nodes' }) };
     this.sigma.resize(true);
+    this.measure();
     if (camera) this.sigma.getCamera().setState(camera);
     this.listen();
     this.sigma.refresh();
@@ -91,7 +93,7 @@ export class MapRenderer {
       hideEdgesOnMove: this.options.map.links.source.length > 20_000,
       minCameraRatio: 0.02,
       maxCameraRatio: 2.5,
-      stagePadding: 34,
+      stagePadding: 28,
       zIndex: true,
       nodeReducer: (_, knot) => this.showKnot(knot),
       edgeReducer: (_, thread) => this.showThread(thread),
@@ -118,9 +120,10 @@ export class MapRenderer {
     const away = selected >= 0 && work !== selected && !linked.has(work);
     const dye = away ? mixed(dyeOf(map.cluster[work], this.scheme), ground, 0.62) : dyeOf(map.cluster[work], this.scheme);
     const hollow = isUncertain(map.firmness[work]);
-    const look: Knot = { ...knot, color: hollow ? ground : dye, hem: hollow ? dye : ground, hemWidth: hollow ? 1.8 : 0.9, zIndex: away ? 0 : 1 };
-    if (work === selected) return { ...look, hem: this.scheme === 'light' ? ink : weld, hemWidth: 2.6, size: knot.size + 3, zIndex: 3 };
-    if (work === this.hovered) return { ...look, hem: ink, hemWidth: 1.8, size: knot.size + 1, zIndex: 2 };
+    const size = knot.size * this.knotScale;
+    const look: Knot = { ...knot, size, color: hollow ? ground : dye, hem: hollow ? dye : ground, hemWidth: hollow ? 1.8 : 0.9, zIndex: away ? 0 : 1 };
+    if (work === selected) return { ...look, hem: this.scheme === 'light' ? ink : weld, hemWidth: 2.6, size: size + 3, zIndex: 3 };
+    if (work === this.hovered) return { ...look, hem: ink, hemWidth: 1.8, size: size + 1, zIndex: 2 };
     return look;
   }
 
@@ -144,6 +147,7 @@ export class MapRenderer {
       this.drawAbove();
     });
     sigma.on('resize', () => {
+      this.measure();
       this.hover(-1);
       onHover(null, { x: 0, y: 0 });
     });
@@ -169,6 +173,11 @@ export class MapRenderer {
         onCamera({ x, y, ratio });
       }, 350);
     });
+  }
+
+  private measure(): void {
+    const { width, height } = this.sigma.getDimensions();
+    this.knotScale = Math.min(1, Math.max(0.5, Math.min(width, height) / 620));
   }
 
   private hover(work: number): void {

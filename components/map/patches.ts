@@ -108,3 +108,13 @@ export function clusterPatches(map: Pick<AnalysisMap, 'x' | 'y' | 'cluster' | 'c
     return patchOf(cluster, ahead, grid) ?? [];
   });
 }
+
+/** The frame in which a map is first shown: its works but for far outliers, and all of its cloth. */
+export function frameOf(map: Pick<AnalysisMap, 'x' | 'y'>, patches: readonly Patch[]): Extent {
+  const frame = extentOf(map.x, map.y);
+  for (const [x, y] of patches.flatMap((patch) => patch.loops.flat())) {
+    frame.x = [Math.min(frame.x[0], x), Math.max(frame.x[1], x)];
+    frame.y = [Math.min(frame.y[0], y), Math.max(frame.y[1], y)];
+  }
+  return frame;
+}

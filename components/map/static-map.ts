@@ -1,7 +1,6 @@
 import { dyeOf, inks, weaveOf, type Scheme } from '@/components/map/dyes';
-import { extentOf } from '@/components/map/extent';
 import { labelOfCluster } from '@/components/map/label-layer';
-import { clusterPatches, type Patch } from '@/components/map/patches';
+import { clusterPatches, frameOf, type Patch } from '@/components/map/patches';
 import { isUncertain, knotSide, partThreads } from '@/components/map/threads';
 import { xmlText } from '@/lib/analyses/reading/xml-text';
 import { type AnalysisMap } from '@/lib/api/types';
@@ -26,8 +25,8 @@ const round = (value: number) => Number(value.toFixed(1));
 export const basisWords: Record<AnalysisMap['basis'], string> = { cocitation: 'cited together', coupling: 'shared references', citation: 'citing each other' };
 
 /** From the coordinates of the map to the picture; y grows downwards there. */
-function project(map: AnalysisMap): (x: number, y: number) => [number, number] {
-  const extent = extentOf(map.x, map.y);
+function project(map: AnalysisMap, patches: readonly Patch[]): (x: number, y: number) => [number, number] {
+  const extent = frameOf(map, patches);
   const scale = Math.min(frameWidth / (extent.x[1] - extent.x[0]), frameHeight / (extent.y[1] - extent.y[0]));
   const [middleX, middleY] = [(extent.x[0] + extent.x[1]) / 2, (extent.y[0] + extent.y[1]) / 2];
   return (x, y) => [round(frameWidth / 2 + (x - middleX) * scale), round(headHeight + frameHeight / 2 - (y - middleY) * scale)];
@@ -41,11 +40,15 @@ function weavePattern(cluster: number, scheme: Scheme): string {
   return `<pattern id="weave-${cluster}" width="${spacing}" height="${spacing}" patternUnits="userSpaceOnUse" patternTransform="rotate(${angles[0]})"><g stroke="${dyeOf(cluster, scheme)}" stroke-opacity="0.2" stroke-width="1" fill="none">${lines}</g></pattern>`;
 }
 
-function drawPatch(patch: Patch, at: (x: number, y: number) => [number, number], scheme: Scheme): string {
-  const path = patch.loops.map((loop) => `M${loop.map(([x, y]) => at(x, y).join(' ')).join('L')}Z`).join('');
-  const dye = dyeOf(patch.cluster, scheme);
-  const woven = weaveOf(patch.cluster) ? `<path d="${path}" fill="url(#weave-${patch.cluster})" fill-rule="evenodd"/>` : '';
-  return `<path d="${path}" fill="${dye}" fill-opacity="0.09" fill-rule="evenodd"/>${woven}<path d="${path}" fill="none" stroke="${dye}" stroke-opacity="0.55" stroke-width="1.4" stroke-dasharray="6 4"/>`;
+/** The outline of a patch, kept once and used three times. */
+function patchPath(patch: Patch, at: (x: number, y: number) => [number, number]): string {
+  return `<path id="patch-${patch.cluster}" d="${patch.loops.map((loop) => `M${loop.map(([x, y]) => at(x, y).join(' ')).join('L')}Z`).join('')}" fill-rule="evenodd"/>`;
+}
+
+function drawPatch({ cluster }: Patch, scheme: Scheme): string {
+  const dye = dyeOf(cluster, scheme);
+  const use = (look: string) => `<use href="#patch-${cluster}" ${look}/>`;
+  return `${use(`fill="${dye}" fill-opacity="0.09"`)}${weaveOf(cluster) ? use(`fill="url(#weave-${cluster})"`) : ''}${use(`fill="none" stroke="${dye}" stroke-opacity="0.55" stroke-width="1.4" stroke-dasharray="6 4"`)}`;
 }
 
 function drawThreads(map: AnalysisMap, places: [number, number][], scheme: Scheme): { svg: string; drawn: number } {
@@ -112,9 +115,9 @@ function drawLegend(map: AnalysisMap, scheme: Scheme): string {
 export function drawStaticMap(map: AnalysisMap, options: StaticMapOptions): string {
   const { scheme } = options;
   const { ground, ink, inkSoft, thread } = inks[scheme];
-  const at = project(map);
-  const places = map.ids.map((_, work) => at(map.x[work], map.y[work]));
   const patches = options.patches ?? clusterPatches(map);
+  const at = project(map, patches);
+  const places = map.ids.map((_, work) => at(map.x[work], map.y[work]));
   const threads = drawThreads(map, places, scheme);
   const [width, height] = [frameWidth + legendWidth, headHeight + frameHeight + footHeight];
   const links = map.links.source.length;
@@ -122,10 +125,10 @@ export function drawStaticMap(map: AnalysisMap, options: StaticMapOptions): stri
   return [
     `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${width} ${height}" width="${width}" height="${height}" role="img" aria-labelledby="map-title map-description" font-family="'Public Sans', system-ui, sans-serif">`,
     `<title id="map-title">${xmlText(options.title)}: map of works ${basisWords[map.basis]}</title><desc id="map-description">${xmlText(`${counts} ${options.caution} ${options.provenance}`)}</desc>`,
-    `<defs>${patches.map((patch) => weavePattern(patch.cluster, scheme)).join('')}<clipPath id="frame"><rect x="0" y="${headHeight}" width="${frameWidth}" height="${frameHeight}"/></clipPath></defs>`,
+    `<defs>${patches.map((patch) => weavePattern(patch.cluster, scheme) + patchPath(patch, at)).join('')}<clipPath id="frame"><rect x="0" y="${headHeight}" width="${frameWidth}" height="${frameHeight}"/></clipPath></defs>`,
     `<rect width="${width}" height="${height}" fill="${ground}"/>`,
     `<text x="28" y="42" font-family="Newsreader, Georgia, serif" font-size="26" fill="${ink}">${xmlText(clip(options.title, 70))}</text><text x="28" y="63" font-size="13" fill="${inkSoft}">${xmlText(counts)}</text>`,
-    `<g clip-path="url(#frame)">${patches.map((patch) => drawPatch(patch, at, scheme)).join('')}${threads.svg}${drawKnots(map, places, scheme)}${drawLabels(map, patches, at, scheme)}</g>`,
+    `<g clip-path="url(#frame)">${patches.map((patch) => drawPatch(patch, scheme)).join('')}${threads.svg}${drawKnots(map, places, scheme)}${drawLabels(map, patches, at, scheme)}</g>`,
     drawLegend(map, scheme),
     `<path d="M28 ${height - 50}H${width - 28}" stroke="${thread}" stroke-width="0.7"/><text x="28" y="${height - 31}" font-size="12.5" fill="${ink}">${xmlText(options.caution)}</text><text x="28" y="${height - 13}" font-size="12" fill="${inkSoft}">${xmlText(options.provenance)}</text>`,
     '</svg>\n',

@@ -1,6 +1,7 @@
 'use client';
 
 import { basisWords } from '@/components/analyses/analysis-words';
+import { clusterName } from '@/components/analyses/work-name';
 import { FilterField } from '@/components/tables/filter-field';
 import { SelectField } from '@/components/ui/field';
 import { bases, type Basis } from '@/lib/network/types';
@@ -28,13 +29,13 @@ export function RankingFilters({ filters, clusters, onChange }: RankingFiltersPr
   return (
     <>
       <div className="w-full sm:w-64"><FilterField label="Filter by title, author or venue" value={filters.q} onChange={(q) => onChange({ q: q || null }, 'replace')} /></div>
-      <div className="w-28"><FilterField label="Published from, year" placeholder="From year" value={filters.yearFrom} onChange={(year) => onChange({ yearFrom: year || null }, 'replace')} /></div>
-      <div className="w-28"><FilterField label="Published to, year" placeholder="To year" value={filters.yearTo} onChange={(year) => onChange({ yearTo: year || null }, 'replace')} /></div>
+      <div className="w-28"><FilterField label="Published from, year" placeholder="From year" value={filters.yearFrom} onChange={(year) => onChange({ yearFrom: year || null }, 'replace')} className="min-w-0!" /></div>
+      <div className="w-28"><FilterField label="Published to, year" placeholder="To year" value={filters.yearTo} onChange={(year) => onChange({ yearTo: year || null }, 'replace')} className="min-w-0!" /></div>
       <SelectField label="Cluster" labelHidden className="w-56 max-w-full text-table" value={`${filters.basis || 'cocitation'}:${filters.cluster}`} onChange={(event) => chooseCluster(event.target.value)}>
         {bases.map((basis) => (
           <optgroup key={basis} label={basisWords[basis]}>
             <option value={`${basis}:`}>{`All clusters, ${basisWords[basis].toLowerCase()}`}</option>
-            {clusters[basis].map((cluster) => <option key={cluster.letter} value={`${basis}:${cluster.letter}`}>{`${cluster.letter} · ${cluster.name} (${cluster.size})`}</option>)}
+            {clusters[basis].map((cluster) => <option key={cluster.letter} value={`${basis}:${cluster.letter}`}>{`${cluster.letter} · ${clusterName(cluster.name)} (${cluster.size})`}</option>)}
             <option value={`${basis}:none`}>In no cluster</option>
           </optgroup>
         ))}

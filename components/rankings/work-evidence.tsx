@@ -9,7 +9,6 @@ import { DistributionStrip } from '@/components/charts/distribution-strip';
 import { YearBars } from '@/components/charts/year-bars';
 import { EvidencePanel } from '@/components/evidence/evidence-panel';
 import { EvidenceMethod, EvidenceRows, EvidenceSection, FileLines } from '@/components/evidence/evidence-parts';
-import { Button } from '@/components/ui/button';
 import { DefinitionList } from '@/components/ui/definition-list';
 import { count, formatDecimal, formatNumber } from '@/components/ui/numbers';
 import { Caution, Pill } from '@/components/ui/status';
@@ -54,7 +53,7 @@ function Places({ evidence, shown, onMore }: { evidence: EvidenceView; shown: nu
       ) : (
         <p className="text-table text-ink-soft">{evidence.placesHidden > 0 ? 'In no file that you were given.' : 'No references: nothing was counted.'}</p>
       )}
-      {left > 0 && (shown < 200 ? <Button kind="quiet" className="justify-self-start px-0 text-indigo underline" onClick={onMore}>{count(left, 'more', 'more')}</Button> : <p className="text-small text-ink-soft">and {formatNumber(left)} more</p>)}
+      {left > 0 && (shown < 200 ? <button type="button" className="min-h-6 justify-self-start text-small text-indigo underline decoration-1 underline-offset-[3px]" onClick={onMore}>{count(left, 'more', 'more')}</button> : <p className="text-small text-ink-soft">and {formatNumber(left)} more</p>)}
       {evidence.placesHidden > 0 && <p className="text-small text-ink-soft">{count(evidence.placesHidden, 'further reference')} in files of portfolios that you were not given.</p>}
     </EvidenceSection>
   );
@@ -79,7 +78,7 @@ export function WorkEvidence({ analysisId, measure, work, spreads, onClose }: Wo
       panelKey={`${measure}:${work}`}
       title={evidence ? titleOf(evidence) : 'Evidence'}
       subject={evidence && <Link href={`/works/${evidence.work.id}`}>{workName(evidence.work)}</Link>}
-      facts={evidence && <>{[evidence.work.authors, evidence.work.year].filter((part) => part !== null).join(' · ')} {evidence.work.retracted && <Pill tone="problem">Retracted</Pill>}</>}
+      facts={evidence && <>{evidence.work.title !== null && [evidence.work.authors, evidence.work.year].filter((part) => part !== null).join(' · ')} {evidence.work.retracted && <Pill tone="problem">Retracted</Pill>}</>}
       loading={isLoading && !evidence}
       problem={error?.message ?? null}
       onRetry={() => void mutate()}

@@ -1,6 +1,7 @@
 import { type Actor } from '@/lib/access/permissions';
-import { countSameAuthor } from '@/lib/analyses/reading/same-authors';
+import { countSameAuthor, type KnownNames } from '@/lib/analyses/reading/same-authors';
 import { type EvidenceView } from '@/lib/api/types';
+import { parseName } from '@/lib/bibliography/names';
 import { type PersonName } from '@/lib/bibliography/record';
 import { visiblePortfolios } from '@/lib/catalogue/reading/visibility';
 import { select, selectIn } from '@/lib/db/bulk';
@@ -91,13 +92,25 @@ export async function readPlaces(actor: Actor, subject: Subject, paging: { page:
   };
 }
 
-const namesOf = (value: string | PersonName[] | null): PersonName[] => (typeof value === 'string' ? (JSON.parse(value) as PersonName[]) : (value ?? []));
+interface NamesRow {
+  id: number;
+  authors: string | PersonName[] | null;
+  authorsLabel: string | null;
+}
+
+/** Cited-only works have no list of authors; what references gave, their first author, stands in the label. */
+function namesOf(row: NamesRow | undefined): KnownNames {
+  const listed = typeof row?.authors === 'string' ? (JSON.parse(row.authors) as PersonName[]) : (row?.authors ?? []);
+  if (listed.length > 0) return { names: listed, partly: false };
+  const first = row?.authorsLabel ? parseName(row.authorsLabel.replace(/ et al\.?$/, '')) : undefined;
+  return { names: first ? [first] : [], partly: true };
+}
 
 /** Same-author citations among the given ones. */
 export async function readSameAuthor(workId: number, others: readonly number[]): Promise<{ same: number; undetermined: number }> {
-  const rows = await selectIn<{ id: number; authors: string | PersonName[] | null }, number>(null, 'SELECT id, authors FROM works WHERE id IN (?)', [workId, ...others]);
-  const byId = new Map(rows.map((row) => [row.id, namesOf(row.authors)]));
-  return countSameAuthor(byId.get(workId) ?? [], others.map((id) => byId.get(id) ?? []));
+  const rows = await selectIn<NamesRow, number>(null, 'SELECT id, authors, authorsLabel FROM works WHERE id IN (?)', [workId, ...others]);
+  const byId = new Map(rows.map((row) => [row.id, row]));
+  return countSameAuthor(namesOf(byId.get(workId)), others.map((id) => namesOf(byId.get(id))));
 }
 
 /** Works of one publication year: how many there are, are cited less, and are cited as often. */

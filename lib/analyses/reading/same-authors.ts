@@ -10,19 +10,24 @@ function identityOf(name: PersonName): string | null {
 
 const identitiesOf = (names: readonly PersonName[]): Set<string> => new Set(names.map(identityOf).filter((one) => one !== null));
 
+/** Names of a work as far as they are known; `partly` where a reference gave no more than its first author. */
+export interface KnownNames {
+  names: readonly PersonName[];
+  partly: boolean;
+}
+
 /**
  * How many of the citing works share an author with the cited one, by family name and first initial (which overstates where names are
- * common). Works that name no person on either side cannot be told.
+ * common). Works that name no person on either side cannot be told, nor can a work known by its first author alone whom nobody shares.
  */
-export function countSameAuthor(cited: readonly PersonName[], citing: readonly (readonly PersonName[])[]): { same: number; undetermined: number } {
-  const own = identitiesOf(cited);
-  if (own.size === 0) return { same: 0, undetermined: citing.length };
+export function countSameAuthor(cited: KnownNames, citing: readonly KnownNames[]): { same: number; undetermined: number } {
+  const own = identitiesOf(cited.names);
   let same = 0;
   let undetermined = 0;
-  for (const names of citing) {
+  for (const { names, partly } of citing) {
     const others = identitiesOf(names);
-    if (others.size === 0) undetermined += 1;
-    else if ([...others].some((one) => own.has(one))) same += 1;
+    if ([...others].some((one) => own.has(one))) same += 1;
+    else if (own.size === 0 || others.size === 0 || cited.partly || partly) undetermined += 1;
   }
   return { same, undetermined };
 }

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 
 import { areaOf, contourLoops, roundLoop } from '@/components/map/contours';
 import { extentOf } from '@/components/map/extent';
-import { clusterPatches } from '@/components/map/patches';
+import { clusterPatches, frameOf } from '@/components/map/patches';
 
 /** Whether a point lies within loops, by the even-odd rule. */
 function inside(loops: readonly (readonly [number, number][])[], x: number, y: number): boolean {
@@ -105,6 +105,14 @@ describe('patches', () => {
     expect(clusterPatches(scraps).map((patch) => patch.cluster)).toEqual([0]);
     expect(clusterPatches(mapOf([]))).toEqual([]);
     expect(clusterPatches(parted)).toEqual(clusterPatches(parted));
+  });
+
+  it('lie within the frame of the map, also where they are few', () => {
+    const few = mapOf([{ x: [0, 1, 0.4], y: [0, 0.2, 1], cluster: 0 }]);
+    const patches = clusterPatches(few);
+    const frame = frameOf(few, patches);
+    for (const [x, y] of patches.flatMap((patch) => patch.loops.flat())) expect(x >= frame.x[0] && x <= frame.x[1] && y >= frame.y[0] && y <= frame.y[1]).toBe(true);
+    expect(patches).toHaveLength(1);
   });
 
   it('know their top and bottom for labels', () => {
