@@ -47,8 +47,8 @@ function patchPath(patch: Patch, at: (x: number, y: number) => [number, number])
 
 function drawPatch({ cluster }: Patch, scheme: Scheme): string {
   const dye = dyeOf(cluster, scheme);
-  const use = (look: string) => `<use href="#patch-${cluster}" ${look}/>`;
-  return `${use(`fill="${dye}" fill-opacity="0.09"`)}${weaveOf(cluster) ? use(`fill="url(#weave-${cluster})"`) : ''}${use(`fill="none" stroke="${dye}" stroke-opacity="0.55" stroke-width="1.4" stroke-dasharray="6 4"`)}`;
+  const copy = (look: string) => `<use href="#patch-${cluster}" ${look}/>`;
+  return `${copy(`fill="${dye}" fill-opacity="0.09"`)}${weaveOf(cluster) ? copy(`fill="url(#weave-${cluster})"`) : ''}${copy(`fill="none" stroke="${dye}" stroke-opacity="0.55" stroke-width="1.4" stroke-dasharray="6 4"`)}`;
 }
 
 function drawThreads(map: AnalysisMap, places: [number, number][], scheme: Scheme): { svg: string; drawn: number } {
