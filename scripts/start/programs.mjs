@@ -36,7 +36,9 @@ function mayRun(file) {
 function findMariadb() {
   const server = findProgram(['mariadbd', 'mysqld']);
   const install = findProgram(['mariadb-install-db', 'mysql_install_db']);
-  if (!server || !install) return null;
+  // The set-up program calls this one; Debian ships it with the client.
+  const defaults = findProgram(['my_print_defaults']);
+  if (!server || !install || !defaults) return null;
   // mysqld may also be another server of the same family, which lacks what the migrations use.
   const version = execFileSync(server, ['--no-defaults', '--version'], { encoding: 'utf8', stdio: ['ignore', 'pipe', 'ignore'] });
   return /mariadb/i.test(version) ? { server, install } : null;
@@ -54,35 +56,36 @@ function findChromium() {
 
 /** The MariaDB programs, installed first when root runs this on Debian and they are missing. */
 export function requireMariadb() {
-  // The -core package holds the server without any service of its own: nothing gets started, no server of the machine's is touched.
-  return requireProgram('MariaDB', 'mariadb-server-core', findMariadb);
+  // The -core packages hold the programs without any service of their own: nothing gets started, no server of the machine's is touched.
+  return requireProgram('MariaDB', ['mariadb-server-core', 'mariadb-client-core'], findMariadb);
 }
 
 /** The browser of the end-to-end tests, installed like MariaDB. */
 export function requireChromium() {
-  return requireProgram('Chromium', 'chromium', findChromium);
+  return requireProgram('Chromium', ['chromium'], findChromium);
 }
 
 /**
  * @template Found
  * @param {string} title
- * @param {string} debianPackage
+ * @param {string[]} debianPackages
  * @param {() => Found | null} find
  * @returns {Found}
  */
-function requireProgram(title, debianPackage, find) {
+function requireProgram(title, debianPackages, find) {
   const found = find();
   if (found) return found;
+  const names = debianPackages.join(' ');
   const apt = findProgram(['apt-get']);
-  if (!apt) throw new Stop(`${title} is missing on this machine. Install it (on Debian, the package ${debianPackage}) and start again.`);
+  if (!apt) throw new Stop(`${title} is missing on this machine. Install it (on Debian: ${names}) and start again.`);
   if (process.getuid?.() !== 0) {
-    throw new Stop(`${title} is missing on this machine. Install it with this one command and start again:\n  sudo sh -c 'apt-get update && apt-get install -y --no-install-recommends ${debianPackage}'`);
+    throw new Stop(`${title} is missing on this machine. Install it with this one command and start again:\n  sudo sh -c 'apt-get update && apt-get install -y --no-install-recommends ${names}'`);
   }
-  say(`Installing ${title} (${debianPackage}) ...`);
+  say(`Installing ${title} (${names}) ...`);
   runApt(apt, ['update']);
-  runApt(apt, ['install', '-y', '--no-install-recommends', debianPackage]);
+  runApt(apt, ['install', '-y', '--no-install-recommends', ...debianPackages]);
   const installed = find();
-  if (!installed) throw new Stop(`${debianPackage} was installed, yet ${title} is still not found.`);
+  if (!installed) throw new Stop(`${names} was installed, yet ${title} is still not found.`);
   return installed;
 }
 
