@@ -17,6 +17,7 @@ export { PortfolioGrant } from '@/models/portfolio-grant';
 export { PortfolioWork } from '@/models/portfolio-work';
 export { Reference } from '@/models/reference';
 export { ReferenceVariant } from '@/models/reference-variant';
+export { Setting } from '@/models/setting';
 export { Unit } from '@/models/unit';
 export { User } from '@/models/user';
 export { Work } from '@/models/work';

@@ -13,9 +13,13 @@ import { defaultParameters } from '@/lib/network/types';
 import { Analysis } from '@/models/analysis';
 import { Import } from '@/models/import';
 import { Portfolio } from '@/models/portfolio';
+import { Setting } from '@/models/setting';
 import { Unit } from '@/models/unit';
 
 type Say = (line: string) => void;
+
+/** Set once all of it stands; from then on people's own changes to the demonstration are left as they are. */
+const readySetting = 'demonstration.ready';
 
 /** Runs queued jobs in this process until none is left: seeding needs no worker, and waits for one that already runs. */
 async function workOff(unfinished: () => Promise<number>): Promise<void> {
@@ -59,13 +63,19 @@ async function seedPortfolio(portfolio: Demonstration['portfolios'][number], uni
 
 /**
  * Seeds Tarnholm University: accounts, units, portfolios, imports through the very same pipeline that people use, an analysis each.
- * Idempotent by fixed keys; refuses a database that holds anything but the demonstration.
+ * Idempotent by fixed keys: killed in the middle, it goes on where it was. Adds nothing to a service that holds people of its own.
+ *
+ * @returns whether the demonstration's accounts exist
  */
-export async function seedDemonstration(say: Say): Promise<void> {
+export async function seedDemonstration(say: Say): Promise<boolean> {
   const people = await createDemonstrationAccounts();
   if (!people) {
     say('This database has people of its own; no demonstration is added to it.');
-    return;
+    return false;
+  }
+  if (await Setting.findByPk(readySetting)) {
+    say('The demonstration is there.');
+    return true;
   }
   const demonstration = generateDemonstration(1);
   const units = await seedUnits(demonstration);
@@ -80,5 +90,7 @@ export async function seedDemonstration(say: Say): Promise<void> {
     if (analysis.state !== 'finished') throw new Error(`The demonstration's analysis of ${portfolio.name} ended as ${analysis.state}: ${analysis.error ?? 'no reason given'}`);
     say(`  analysis: ${analysis.summary?.works} works, ${analysis.summary?.citations} citations, ${analysis.summary?.bases.map((basis) => `${basis.clusters} clusters (${basis.basis})`).join(', ')}`);
   }
+  await Setting.upsert({ name: readySetting, value: true });
   say(`The demonstration is ready (${Math.round((Date.now() - started) / 1000)} s).`);
+  return true;
 }

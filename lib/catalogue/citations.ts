@@ -2,12 +2,6 @@ import { type Transaction } from 'sequelize';
 
 import { run } from '@/lib/db/bulk';
 
-const pairs = `
-  SELECT record.workId AS citingWorkId, variant.workId AS citedWorkId, COUNT(*) AS referenceCount
-  FROM import_records record
-  JOIN cited_references reference ON reference.recordId = record.id
-  JOIN reference_variants variant ON variant.hash = reference.variantHash`;
-
 async function gather(transaction: Transaction): Promise<void> {
   await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citedWorkId FROM touched_works touched JOIN citations citation ON citation.citingWorkId = touched.id');
   await run(transaction, 'INSERT IGNORE INTO counted_works SELECT DISTINCT citation.citingWorkId FROM moved_targets moved JOIN citations citation ON citation.citedWorkId = moved.id');
@@ -16,7 +10,7 @@ async function gather(transaction: Transaction): Promise<void> {
 /** Remembers, in the temporary table counted_works, whose numbers of citations may change. */
 export async function gatherCounted(transaction: Transaction): Promise<void> {
   await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS counted_works');
-  await run(transaction, 'CREATE TEMPORARY TABLE counted_works (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB');
+  await run(transaction, `CREATE TEMPORARY TABLE counted_works (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB`);
   await gather(transaction);
 }
 
@@ -29,9 +23,15 @@ export async function rebuildCitations(transaction: Transaction): Promise<void> 
   await run(transaction, 'DELETE citation FROM citations citation JOIN moved_targets moved ON moved.id = citation.citedWorkId');
   await run(
     transaction,
-    `INSERT INTO citations (citingWorkId, citedWorkId, referenceCount) ${pairs}
-     JOIN touched_works touched ON touched.id = record.workId
-     WHERE record.citing = 1 AND variant.workId IS NOT NULL AND variant.workId <> record.workId GROUP BY record.workId, variant.workId`,
+    // Work by work in the order of the table's own key, which is why no grouping is left to the server.
+    `INSERT INTO citations (citingWorkId, citedWorkId, referenceCount)
+     SELECT record.workId, variant.workId, 1
+     FROM touched_works touched
+     STRAIGHT_JOIN import_records record ON record.workId = touched.id AND record.citing = 1
+     STRAIGHT_JOIN cited_references reference ON reference.recordId = record.id
+     STRAIGHT_JOIN reference_variants variant ON variant.hash = reference.variantHash
+     WHERE variant.workId IS NOT NULL AND variant.workId <> record.workId
+     ON DUPLICATE KEY UPDATE referenceCount = citations.referenceCount + 1`,
   );
   await run(
     transaction,
@@ -49,7 +49,7 @@ export async function rebuildCitations(transaction: Transaction): Promise<void> 
     transaction,
     `UPDATE works work JOIN counted_works counted ON counted.id = work.id
      SET work.citedCount = (SELECT COUNT(*) FROM citations citation WHERE citation.citedWorkId = work.id),
-         work.citingCount = (SELECT COUNT(*) FROM citations citation WHERE citation.citingWorkId = work.id)`,
+         work.citingCount = IF(work.catalogued = 1, (SELECT COUNT(*) FROM citations citation WHERE citation.citingWorkId = work.id), 0)`,
   );
   await run(transaction, 'DROP TEMPORARY TABLE counted_works');
 }

@@ -17,32 +17,31 @@ interface VariantRow extends VariantText {
   how: string | null;
 }
 
-/** Counts the references in use and gathers every variant whose target may change. */
+/** Counts how many references come into use or go out of it, by variant, and gathers every variant whose target may change. */
 async function touchVariants(transaction: Transaction): Promise<void> {
   await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS touched_variants');
-  await run(transaction, 'CREATE TEMPORARY TABLE touched_variants (hash BINARY(16) NOT NULL PRIMARY KEY, step INT NOT NULL DEFAULT 0) ENGINE = InnoDB');
+  await run(transaction, `CREATE TEMPORARY TABLE touched_variants (hash BINARY(16) NOT NULL PRIMARY KEY, step INT NOT NULL DEFAULT 0) ENGINE = InnoDB`);
   await run(
     transaction,
     `INSERT INTO touched_variants (hash, step)
      SELECT reference.variantHash, SUM(turned.step) FROM turned_records turned JOIN cited_references reference ON reference.recordId = turned.id GROUP BY reference.variantHash`,
   );
-  await run(transaction, 'UPDATE reference_variants variant JOIN touched_variants touched ON touched.hash = variant.hash SET variant.standing = variant.standing + touched.step WHERE touched.step <> 0');
   for (const column of ['identifierKey', 'fieldKey', 'titleKey']) {
     await run(
       transaction,
       `INSERT IGNORE INTO touched_variants (hash)
-       SELECT DISTINCT variant.hash FROM touched_records touched JOIN record_keys own ON own.recordId = touched.id AND own.kind IN (1, 3)
-       JOIN reference_variants variant ON variant.${column} = own.keyHash`,
+       SELECT variant.hash FROM (SELECT DISTINCT own.keyHash FROM touched_records touched JOIN record_keys own ON own.recordId = touched.id AND own.kind IN (1, 3)) met
+       JOIN reference_variants variant ON variant.${column} = met.keyHash`,
     );
   }
   // All variants of one identifier are resolved together; one without an identifier looks at those that share its key. See resolveVariants.
   for (const column of ['identifierKey', 'fieldKey', 'titleKey', 'identifierKey']) {
-    const extra = column === 'titleKey' ? 'AND (other.fieldKey IS NULL OR other.identifierKey IS NOT NULL)' : '';
+    const extra = column === 'titleKey' ? 'WHERE other.fieldKey IS NULL OR other.identifierKey IS NOT NULL' : '';
     await run(
       transaction,
       `INSERT IGNORE INTO touched_variants (hash)
-       SELECT DISTINCT other.hash FROM touched_variants touched JOIN reference_variants own ON own.hash = touched.hash AND own.${column} IS NOT NULL
-       JOIN reference_variants other ON other.${column} = own.${column} ${extra}`,
+       SELECT other.hash FROM (SELECT DISTINCT own.${column} AS sharedKey FROM touched_variants touched JOIN reference_variants own ON own.hash = touched.hash AND own.${column} IS NOT NULL) met
+       JOIN reference_variants other ON other.${column} = met.sharedKey ${extra}`,
     );
   }
 }
@@ -53,7 +52,7 @@ async function cataloguedTargets(transaction: Transaction): Promise<Map<string, 
     const rows = await select<{ keyHash: Buffer; workId: number; workKey: Buffer; doi: string | null }>(
       transaction,
       `SELECT DISTINCT own.keyHash, work.id AS workId, work.workKey, work.doi
-       FROM (SELECT DISTINCT variant.${column} AS keyHash FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.${column} IS NOT NULL AND variant.standing > 0) wanted
+       FROM (SELECT DISTINCT variant.${column} AS keyHash FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.${column} IS NOT NULL AND variant.standing + touched.step > 0) wanted
        JOIN record_keys own ON own.keyHash = wanted.keyHash AND own.kind IN (1, 3)
        JOIN import_records record ON record.id = own.recordId AND record.catalogued = 1
        JOIN works work ON work.id = record.workId`,
@@ -98,8 +97,9 @@ export async function resolveTouchedVariants(transaction: Transaction, progress:
   const rows = await select<VariantRow>(
     transaction,
     `SELECT variant.hash, variant.doi, variant.identifierKey, variant.fieldKey, variant.titleKey, variant.ownKey, variant.workId, variant.how,
-       variant.pmid, variant.author, variant.family, variant.year, variant.title, variant.source, variant.volume, variant.issue, variant.page, variant.raw, variant.standing
-     FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.standing > 0`,
+       variant.pmid, variant.author, variant.family, variant.year, variant.title, variant.source, variant.volume, variant.issue, variant.page, variant.raw,
+       variant.standing + touched.step AS standing
+     FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.standing + touched.step > 0`,
   );
   const catalogue = await cataloguedTargets(transaction);
   await progress('linking', 1, 3);
@@ -135,22 +135,31 @@ export async function resolveTouchedVariants(transaction: Transaction, progress:
       settle.add(row.workId);
     }
   });
-  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS moved_variants');
-  await run(transaction, 'CREATE TEMPORARY TABLE moved_variants (hash BINARY(16) NOT NULL PRIMARY KEY, workId BIGINT UNSIGNED NOT NULL, how VARCHAR(12) CHARACTER SET ascii COLLATE ascii_bin NOT NULL) ENGINE = InnoDB');
-  await insertRows(transaction, 'INSERT INTO moved_variants (hash, workId, how)', moves);
-  await run(transaction, 'UPDATE reference_variants variant JOIN moved_variants moved ON moved.hash = variant.hash SET variant.workId = moved.workId, variant.how = moved.how');
-  await run(transaction, 'DROP TEMPORARY TABLE moved_variants');
   // Variants that nobody uses any more lead nowhere.
-  const idle = await select<{ workId: number }>(
+  const idle = await select<{ hash: Buffer; workId: number }>(
     transaction,
-    'SELECT DISTINCT variant.workId FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.standing = 0 AND variant.workId IS NOT NULL',
+    'SELECT variant.hash, variant.workId FROM touched_variants touched JOIN reference_variants variant ON variant.hash = touched.hash WHERE variant.standing + touched.step = 0 AND variant.workId IS NOT NULL',
   );
-  for (const { workId } of idle) settle.add(workId);
-  await run(transaction, 'UPDATE reference_variants variant JOIN touched_variants touched ON touched.hash = variant.hash SET variant.workId = NULL, variant.how = NULL WHERE variant.standing = 0 AND variant.workId IS NOT NULL');
+  for (const { hash, workId } of idle) {
+    settle.add(workId);
+    moves.push([hash, null, null]);
+  }
+  await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS moved_variants');
+  await run(transaction, `CREATE TEMPORARY TABLE moved_variants (hash BINARY(16) NOT NULL PRIMARY KEY, workId BIGINT UNSIGNED NULL, how VARCHAR(12) CHARACTER SET ascii COLLATE ascii_bin NULL) ENGINE = InnoDB`);
+  await insertRows(transaction, 'INSERT INTO moved_variants (hash, workId, how)', moves);
+  await run(
+    transaction,
+    `UPDATE reference_variants variant JOIN touched_variants touched ON touched.hash = variant.hash LEFT JOIN moved_variants moved ON moved.hash = touched.hash
+     SET variant.standing = variant.standing + touched.step,
+         variant.workId = IF(moved.hash IS NULL, variant.workId, moved.workId),
+         variant.how = IF(moved.hash IS NULL, variant.how, moved.how)
+     WHERE touched.step <> 0 OR moved.hash IS NOT NULL`,
+  );
+  await run(transaction, 'DROP TEMPORARY TABLE moved_variants');
   await progress('linking', 2, 3);
 
   await run(transaction, 'DROP TEMPORARY TABLE IF EXISTS moved_targets');
-  await run(transaction, 'CREATE TEMPORARY TABLE moved_targets (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB');
+  await run(transaction, `CREATE TEMPORARY TABLE moved_targets (id BIGINT UNSIGNED NOT NULL PRIMARY KEY) ENGINE = InnoDB`);
   await insertRows(transaction, 'INSERT IGNORE INTO moved_targets (id)', [...moved].map((id) => [id]));
   for (const id of await temporaryIds(transaction, 'touched_works')) settle.add(id);
   return [...settle].sort((a, b) => a - b);

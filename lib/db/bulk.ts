@@ -21,8 +21,9 @@ export async function insertRows(transaction: Transaction, statement: string, ro
   if (rows.length === 0) return;
   const width = rows[0].length;
   const sql = `${statement} VALUES (${Array(width).fill('?').join(', ')}) ${suffix}`;
+  const connection = driverConnection(transaction);
   for (let from = 0; from < rows.length; from += 5_000) {
-    await driverConnection(transaction).batch(sql, rows.slice(from, from + 5_000) as Cell[][]);
+    await connection.batch(sql, rows.slice(from, from + 5_000) as Cell[][]);
   }
 }
 

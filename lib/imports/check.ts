@@ -112,7 +112,7 @@ export async function countImport(transaction: Transaction | null, importId: num
   const [{ linked }] = await select<{ linked: number }>(
     transaction,
     `SELECT COUNT(*) AS linked FROM import_records record JOIN cited_references reference ON reference.recordId = record.id
-     JOIN reference_variants variant ON variant.hash = reference.variantHash JOIN works work ON work.id = variant.workId AND work.catalogued = 1
+     JOIN reference_variants variant ON variant.hash = reference.variantHash AND variant.how IN ('doi', 'fields', 'title')
      WHERE record.importId = ? AND record.catalogued = 1`,
     [importId],
   );

@@ -5,7 +5,7 @@ import { type Transaction } from 'sequelize';
 import { database } from '@/lib/db/connection';
 import { insertRows, run, select, type Cell } from '@/lib/db/bulk';
 import { ExpectedError } from '@/lib/errors';
-import { variantColumns, type Batch } from '@/lib/imports/rows';
+import { variantColumns, variantHashes, type Batch } from '@/lib/imports/rows';
 import { type ReadRequest, type ThreadMessage } from '@/lib/imports/read-thread';
 import { type JobContext } from '@/lib/jobs/context';
 import { startThread } from '@/lib/jobs/threads';
@@ -29,14 +29,14 @@ async function writeBatch(transaction: Transaction, importId: number, batch: Bat
   const references: Cell[][] = [];
   for (const record of batch.records) {
     const id = idAt.get(record.position) as number;
-    for (const key of record.keys) keys.push([Buffer.from(key.hash), id, key.kind]);
-    record.references.forEach((reference, position) => references.push([id, position, reference.line, Buffer.from(reference.variant), reference.raw]));
+    for (const key of record.keys) keys.push([Buffer.from(key.hash, 'hex'), id, key.kind]);
+    record.references.forEach((reference, position) => references.push([id, position, reference.line, Buffer.from(reference.variant, 'hex'), reference.raw]));
   }
   await insertRows(transaction, 'INSERT IGNORE INTO record_keys (keyHash, recordId, kind)', keys);
   await insertRows(
     transaction,
     `INSERT IGNORE INTO reference_variants (${variantColumns.join(', ')})`,
-    batch.variants.map((row) => row.map((cell) => (cell instanceof Uint8Array ? Buffer.from(cell) : cell))),
+    batch.variants.map((row) => row.map((cell, place) => (place < variantHashes && cell !== null ? Buffer.from(cell as string, 'hex') : cell))),
   );
   await insertRows(transaction, 'INSERT INTO cited_references (recordId, position, line, variantHash, raw)', references);
   await insertRows(

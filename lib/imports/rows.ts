@@ -1,5 +1,5 @@
 /** Turns an entry, as a reader gave it, into rows of the database. Runs in the reading thread; the worker only writes what comes out. */
-import { keyHash } from '@/lib/catalogue/key-hash';
+import { keyHashHex } from '@/lib/catalogue/key-hash';
 import { recordKeys, referenceKeys } from '@/lib/linking/keys';
 import { type CitedReference, type Entry, type Problem } from '@/lib/bibliography/record';
 
@@ -12,14 +12,17 @@ export interface RecordRow {
   fields: string | null;
   rejected: boolean;
   referenceCount: number;
-  keys: { hash: Buffer; kind: 1 | 2 | 3 | 4 }[];
-  references: { line: number; raw: string; variant: Buffer }[];
+  keys: { hash: string; kind: 1 | 2 | 3 | 4 }[];
+  references: { line: number; raw: string; variant: string }[];
 }
 
 /** A row of reference_variants, in the order of `variantColumns`. */
-export type VariantRow = (string | number | Buffer | null)[];
+export type VariantRow = (string | number | null)[];
 
-export const variantColumns = ['hash', 'doi', 'pmid', 'identifierKey', 'fieldKey', 'titleKey', 'ownKey', 'author', 'family', 'year', 'title', 'source', 'volume', 'issue', 'page', 'raw'] as const;
+/** The first five hold hashes: hexadecimal here, since text crosses from thread to thread much faster than buffers do. */
+export const variantColumns = ['hash', 'identifierKey', 'fieldKey', 'titleKey', 'ownKey', 'doi', 'pmid', 'author', 'family', 'year', 'title', 'source', 'volume', 'issue', 'page', 'raw'] as const;
+
+export const variantHashes = 5;
 
 export interface ProblemRow extends Problem {
   position: number | null;
@@ -36,7 +39,7 @@ export interface Batch {
 const cut = (text: string | undefined, length: number): string | null => (text ? text.slice(0, length) : null);
 
 /** The variant of a reference: its hash is made of all that is shown of it, so that a row is the same whichever reference made it first. */
-function variantRow(reference: CitedReference): { hash: Buffer; row: VariantRow } {
+function variantRow(reference: CitedReference): { hash: string; row: VariantRow } {
   const keys = referenceKeys(reference);
   const shown = [
     cut(reference.doi, 300), cut(reference.pmid, 20), cut(reference.author, 200), cut(reference.family, 120), reference.year ?? null, cut(reference.title, 600), cut(reference.source, 300),
@@ -44,17 +47,17 @@ function variantRow(reference: CitedReference): { hash: Buffer; row: VariantRow 
   ] as const;
   const told = [reference.author, reference.title, reference.source].some(Boolean);
   const raw = told ? '' : reference.raw.slice(0, 1000);
-  const hash = keyHash(JSON.stringify([...shown, keys.ownKey, raw]));
+  const hash = keyHashHex(JSON.stringify([...shown, keys.ownKey, raw]));
   const [doi, pmid, author, family, year, title, source, volume, issue, page] = shown;
-  const hashed = (key: string | null) => (key ? keyHash(key) : null);
-  return { hash, row: [hash, doi, pmid, hashed(keys.identifierKey), hashed(keys.fieldKey), hashed(keys.titleKey), keyHash(keys.ownKey), author, family, year, title, source, volume, issue, page, raw] };
+  const hashed = (key: string | null) => (key ? keyHashHex(key) : null);
+  return { hash, row: [hash, hashed(keys.identifierKey), hashed(keys.fieldKey), hashed(keys.titleKey), hashed(keys.ownKey), doi, pmid, author, family, year, title, source, volume, issue, page, raw] };
 }
 
 /** Collects rows until somebody takes them; remembers the references already met, so that one file works each out once. */
 export class BatchBuilder {
   private batch: Batch = { records: [], variants: [], problems: [], bytes: 0 };
   /** Hash by the reference as it stood: most references of a file stand in it more than once. */
-  private readonly known = new Map<string, Buffer>();
+  private readonly known = new Map<string, string>();
   private weight = 0;
 
   addEntry(entry: Entry): void {
@@ -88,10 +91,10 @@ export class BatchBuilder {
       rejected: false,
       referenceCount: references.length,
       keys: [
-        ...keys.identifiers.map((key) => ({ hash: keyHash(key), kind: 1 as const })),
-        ...(keys.fingerprint ? [{ hash: keyHash(keys.fingerprint), kind: 2 as const }] : []),
-        ...keys.referenceKeys.map((key) => ({ hash: keyHash(key), kind: 3 as const })),
-        ...keys.blocks.map((key) => ({ hash: keyHash(key), kind: 4 as const })),
+        ...keys.identifiers.map((key) => ({ hash: keyHashHex(key), kind: 1 as const })),
+        ...(keys.fingerprint ? [{ hash: keyHashHex(keys.fingerprint), kind: 2 as const }] : []),
+        ...keys.referenceKeys.map((key) => ({ hash: keyHashHex(key), kind: 3 as const })),
+        ...keys.blocks.map((key) => ({ hash: keyHashHex(key), kind: 4 as const })),
       ],
       references: rows,
     });

@@ -60,6 +60,11 @@ export async function dumpCatalogue(): Promise<Record<string, unknown[]>> {
       null,
       `SELECT HEX(variant.hash) AS hash, variant.standing, variant.how, HEX(work.workKey) AS work FROM reference_variants variant LEFT JOIN works work ON work.id = variant.workId WHERE variant.standing <> 0 ORDER BY 1`,
     ),
+    astray: await select(
+      null,
+      `SELECT HEX(variant.hash) AS hash FROM reference_variants variant LEFT JOIN works work ON work.id = variant.workId
+       WHERE variant.workId IS NOT NULL AND (work.id IS NULL OR variant.standing = 0) ORDER BY 1`,
+    ),
     texts: await select(null, 'SELECT HEX(work.workKey) AS work, text.content FROM work_texts text JOIN works work ON work.id = text.workId ORDER BY 1'),
   };
 }

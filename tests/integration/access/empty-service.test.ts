@@ -20,7 +20,10 @@ const load = async () => ({
   ...(await import('@/lib/access/first-run')),
   ...(await import('@/lib/access/seeding')),
   ...(await import('@/lib/access/sign-in')),
+  ...(await import('@/models/portfolio')),
+  ...(await import('@/models/setting')),
   ...(await import('@/models/user')),
+  ...(await import('@/seeders/demonstration')),
 });
 let modules: Awaited<ReturnType<typeof load>>;
 
@@ -86,4 +89,22 @@ it('keeps the last administrator, even when two demote each other at the same mo
   const outcomes = await Promise.allSettled([changeUser(actor(one), two.id, { role: 'reader' }, new Headers()), changeUser(actor(two), one.id, { disabled: true }, new Headers())]);
   expect(outcomes.filter((outcome) => outcome.status === 'fulfilled')).toHaveLength(1);
   expect(await User.count({ where: { role: 'administrator', disabledAt: null } })).toBe(1);
+});
+
+it('leaves a demonstration that stands to its people, whatever they have undone or deleted', async () => {
+  const { seedDemonstration, Portfolio, Setting } = modules;
+  await Setting.upsert({ name: 'demonstration.ready', value: true });
+  const said: string[] = [];
+  expect(await seedDemonstration((line) => said.push(line))).toBe(true);
+  expect(said).toEqual(['The demonstration is there.']);
+  expect(await Portfolio.count()).toBe(0);
+});
+
+it('adds no demonstration where real people are, and says so', async () => {
+  const { createUser, seedDemonstration, Portfolio } = modules;
+  await createUser('administrator');
+  const said: string[] = [];
+  expect(await seedDemonstration((line) => said.push(line))).toBe(false);
+  expect(said.join()).toContain('people of its own');
+  expect(await Portfolio.count()).toBe(0);
 });
