@@ -32,8 +32,8 @@ interface LabelView {
 }
 
 /**
- * Letters and names of clusters beside their patches. Larger clusters choose first: above the patch, below it, above with the letter alone;
- * a label that would lie on another is left out, since the legend has it.
+ * Letters and names of clusters above their patches or, where another label stands there, on their middles; a label below a patch would be
+ * read as its neighbour's. Larger clusters choose first; in want of room the letter has to do, and the legend has the name.
  */
 export function drawClusterLabels(map: Pick<AnalysisMap, 'clusters'>, patches: readonly Patch[], { context, project, width, height, hidden, scheme, taken: covered }: LabelView): void {
   const { ground, ink } = inks[scheme];
@@ -49,7 +49,8 @@ export function drawClusterLabels(map: Pick<AnalysisMap, 'clusters'>, patches: r
     if (!cluster || hidden.has(patch.cluster)) continue;
     const [top, bottom] = [project({ x: patch.top[0], y: patch.top[1] }), project({ x: patch.bottom[0], y: patch.bottom[1] })];
     const whole = labelOfCluster(cluster, narrow ? 18 : 40);
-    const tries: [string, number, number][] = [[whole, top.x, top.y - 8], [whole, bottom.x, bottom.y + 20], [cluster.letter, top.x, top.y - 8]];
+    const middle = { x: (top.x + bottom.x) / 2, y: (top.y + bottom.y) / 2 + 5 };
+    const tries: [string, number, number][] = [[whole, top.x, top.y - 8], [whole, middle.x, middle.y], [cluster.letter, top.x, top.y - 8], [cluster.letter, middle.x, middle.y]];
     for (const [text, x, y] of tries) {
       const half = context.measureText(text).width / 2 + 4;
       // A patch that reaches over the edge keeps its label within the view.

@@ -31,7 +31,7 @@ export function RankingFilters({ filters, clusters, onChange }: RankingFiltersPr
       <div className="w-full sm:w-64"><FilterField label="Filter by title, author or venue" value={filters.q} onChange={(q) => onChange({ q: q || null }, 'replace')} /></div>
       <div className="w-28"><FilterField label="Published from, year" placeholder="From year" value={filters.yearFrom} onChange={(year) => onChange({ yearFrom: year || null }, 'replace')} className="min-w-0!" /></div>
       <div className="w-28"><FilterField label="Published to, year" placeholder="To year" value={filters.yearTo} onChange={(year) => onChange({ yearTo: year || null }, 'replace')} className="min-w-0!" /></div>
-      <SelectField label="Cluster" labelHidden className="w-56 max-w-full text-table" value={`${filters.basis || 'cocitation'}:${filters.cluster}`} onChange={(event) => chooseCluster(event.target.value)}>
+      <SelectField label="Cluster" labelHidden className="w-64 max-w-full text-table" value={`${filters.basis || 'cocitation'}:${filters.cluster}`} onChange={(event) => chooseCluster(event.target.value)}>
         {bases.map((basis) => (
           <optgroup key={basis} label={basisWords[basis]}>
             <option value={`${basis}:`}>{`All clusters, ${basisWords[basis].toLowerCase()}`}</option>

@@ -33,10 +33,10 @@ export function WorkFilters({ filters, onChange }: WorkFiltersProps) {
         <option value="">All types</option>
         {workTypes.map((type) => <option key={type} value={type}>{typeWords[type]}</option>)}
       </SelectField>
-      <div className="flex items-center gap-1.5 md:w-[15rem]">
-        <div className="min-w-0 flex-1"><FilterField label="Published from" placeholder="from year" value={filters.yearFrom} onChange={year('yearFrom')} /></div>
+      <div className="col-span-2 flex items-center gap-1.5 md:w-[15rem]">
+        <div className="min-w-0 flex-1"><FilterField label="Published from" placeholder="from year" value={filters.yearFrom} onChange={year('yearFrom')} className="min-w-0!" /></div>
         <span aria-hidden="true" className="text-ink-soft">–</span>
-        <div className="min-w-0 flex-1"><FilterField label="Published to" placeholder="to year" value={filters.yearTo} onChange={year('yearTo')} /></div>
+        <div className="min-w-0 flex-1"><FilterField label="Published to" placeholder="to year" value={filters.yearTo} onChange={year('yearTo')} className="min-w-0!" /></div>
       </div>
       <SelectField label="Retraction" labelHidden value={filters.retracted} onChange={pick('retracted', '')} className="text-table md:w-[11rem]">
         <option value="">Retracted or not</option>
