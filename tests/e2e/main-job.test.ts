@@ -1,7 +1,7 @@
-import { type Browser } from 'playwright-core';
+import { type Browser, type Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 
-import { makeFiles } from '@/tests/e2e/files';
+import { makeFiles, type MadeFile } from '@/tests/e2e/files';
 import { emailOf, launch, serviceUrl, signIn, watchFaults } from '@/tests/e2e/service';
 
 let browser: Browser;
@@ -9,6 +9,19 @@ beforeAll(async () => {
   browser = await launch();
 });
 afterAll(() => browser.close());
+
+/** Lets files fall on the page as a hand would: the browser makes them and fires the events of dragging. */
+async function dropFiles(page: Page, files: readonly MadeFile[]): Promise<void> {
+  const transfer = await page.evaluateHandle((made) => {
+    const carried = new DataTransfer();
+    for (const { name, mimeType, text } of made) carried.items.add(new File([text], name, { type: mimeType }));
+    return carried;
+  }, files.map(({ name, mimeType, buffer }) => ({ name, mimeType, text: buffer.toString('utf8') })));
+  const zone = page.locator('div', { has: page.getByLabel('Files to import') }).last();
+  for (const type of ['dragenter', 'dragover']) await zone.dispatchEvent(type, { dataTransfer: transfer });
+  await page.getByText('Let go to upload').waitFor();
+  await zone.dispatchEvent('drop', { dataTransfer: transfer });
+}
 
 describe('the main job in a browser', () => {
   it('goes from dropped files to ranking, work and map, with two people', async () => {
@@ -30,7 +43,9 @@ describe('the main job in a browser', () => {
     // Files in four formats; reading goes on while the page is loaded anew.
     await page.goto(`${portfolioUrl}/imports`);
     const files = makeFiles(stamp);
-    await page.getByLabel('Files to import').setInputFiles(files);
+    await dropFiles(page, files.slice(0, 2));
+    for (const file of files.slice(0, 2)) await page.getByRole('link', { name: file.name }).first().waitFor();
+    await page.getByLabel('Files to import').setInputFiles(files.slice(2));
     for (const file of files) await page.getByRole('link', { name: file.name }).first().waitFor();
     await page.reload();
     for (const file of files) {
