@@ -3,6 +3,7 @@
 import useSWR, { type SWRConfiguration, type SWRResponse } from 'swr';
 
 import { fetchJson, type ApiProblem } from '@/lib/api/client';
+import { startFromFallback } from '@/lib/api/polling';
 import { type Page } from '@/lib/api/schemas';
 import {
   type ImportProblemView,
@@ -39,6 +40,7 @@ export function useApi<Result>(path: string | null, options: SWRConfiguration<Re
     // 4xx do not change by asking again.
     shouldRetryOnError: (error: ApiProblem) => error.status === 0 || error.status >= 500,
     ...options,
+    refreshInterval: startFromFallback(options.refreshInterval, options.fallbackData as Result | undefined),
   });
 }
 

@@ -13,8 +13,8 @@ export const emailOf = (role: Role): string => `${accountNames[role]}@tarnholm.e
 export function launch(): Promise<Browser> {
   return chromium.launch({
     executablePath: process.env.HEDDLE_CHROMIUM ?? '/usr/bin/chromium',
-    // WebGL in software: the machine that runs the tests need not have a graphics card.
-    args: ['--no-sandbox', '--use-angle=swiftshader', '--enable-unsafe-swiftshader', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'],
+    // WebGL in software: the machine that runs the tests need not have a graphics card. Pages themselves are painted without it, much faster.
+    args: ['--no-sandbox', '--use-angle=swiftshader', '--enable-unsafe-swiftshader', '--disable-gpu-compositing', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'],
   });
 }
 
