@@ -23,7 +23,7 @@ function Row({ analysis }: { analysis: AnalysisView }) {
     <li className="grid gap-x-6 gap-y-2 border-b border-thread py-4 md:grid-cols-[minmax(0,1fr)_auto]">
       <div className="grid min-w-0 gap-1">
         <p className="flex flex-wrap items-center gap-x-3 gap-y-1">
-          <Link href={`${base}/analyses/${analysis.id}`} className="font-serif text-work font-medium"><DateText at={analysis.finishedAt ?? analysis.createdAt} withTime /></Link>
+          <Link prefetch={false} href={`${base}/analyses/${analysis.id}`} className="font-serif text-work font-medium"><DateText at={analysis.finishedAt ?? analysis.createdAt} withTime /></Link>
           <Pill tone={tones[analysis.state]}>{stateWords[analysis.state]}</Pill>
           {analysis.verified === 'same' && <Pill tone="done">Verified</Pill>}
           {analysis.verified === 'different' && <Pill tone="problem">Not the same when run again</Pill>}
@@ -35,9 +35,9 @@ function Row({ analysis }: { analysis: AnalysisView }) {
       </div>
       {analysis.state === 'finished' && (
         <p className="flex items-start gap-x-4 text-table">
-          <Link href={`${base}/rankings?analysis=${analysis.id}`}>Rankings</Link>
-          <Link href={`${base}/clusters?analysis=${analysis.id}`}>Clusters</Link>
-          <Link href={`${base}/map?analysis=${analysis.id}`}>Map</Link>
+          <Link prefetch={false} href={`${base}/rankings?analysis=${analysis.id}`}>Rankings</Link>
+          <Link prefetch={false} href={`${base}/clusters?analysis=${analysis.id}`}>Clusters</Link>
+          <Link prefetch={false} href={`${base}/map?analysis=${analysis.id}`}>Map</Link>
         </p>
       )}
     </li>

@@ -42,8 +42,8 @@ export function ClusterArticle({ cluster, base, query }: ClusterArticleProps) {
           </p>
         )}
         <p className="flex flex-wrap gap-x-4 text-table">
-          <Link href={`${base}/rankings?cluster=${cluster.letter}${query}`}>Its works, ranked</Link>
-          <Link href={`${base}/map?cluster=${cluster.letter}${query}`}>On the map</Link>
+          <Link prefetch={false} href={`${base}/rankings?cluster=${cluster.letter}${query}`}>Its works, ranked</Link>
+          <Link prefetch={false} href={`${base}/map?cluster=${cluster.letter}${query}`}>On the map</Link>
         </p>
       </div>
       <div className="grid content-start gap-4">
@@ -65,11 +65,11 @@ export function ClusterArticle({ cluster, base, query }: ClusterArticleProps) {
             {cluster.coreWorks.map((work) => (
               <li key={work.workId} className="flex items-baseline justify-between gap-4 py-1.5">
                 <span className="min-w-0">
-                  <Link href={`/works/${work.workId}`} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{workName(work)}</Link>{' '}
+                  <Link prefetch={false} href={`/works/${work.workId}`} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{workName(work)}</Link>{' '}
                   <span className="text-small text-ink-soft">{work.title !== null && [work.authors, work.year].filter((part) => part !== null).join(' · ')}</span>
                 </span>
                 <span className="shrink-0 text-small text-ink-soft">
-                  rank {formatNumber(work.rank)} · <Link href={`${base}/rankings?evidence=inDegree:${work.workId}${query}`}>{count(work.inDegree, 'citation')}</Link>
+                  rank {formatNumber(work.rank)} · <Link prefetch={false} href={`${base}/rankings?evidence=inDegree:${work.workId}${query}`}>{count(work.inDegree, 'citation')}</Link>
                 </span>
               </li>
             ))}

@@ -47,13 +47,13 @@ export function FileLines({ lines, more }: { lines: readonly FileLine[]; more?: 
           const place = `${line.file}\u00a0\u00a0line\u00a0${groupedLine(line.line)}`;
           return (
             <li key={`${line.file} ${line.line} ${index}`} className="[overflow-wrap:anywhere]">
-              {line.href ? <Link href={line.href} scroll={false}>{place}</Link> : place}
+              {line.href ? <Link prefetch={false} href={line.href} scroll={false}>{place}</Link> : place}
               {line.text && <span className="mt-0.5 block border-l-2 border-thread pl-2 text-ink">{line.text}</span>}
             </li>
           );
         })}
       </ul>
-      {more && more.count > 0 && <Link href={more.href} scroll={false} className="w-fit text-small">{count(more.count, 'more', 'more')}</Link>}
+      {more && more.count > 0 && <Link prefetch={false} href={more.href} scroll={false} className="w-fit text-small">{count(more.count, 'more', 'more')}</Link>}
     </div>
   );
 }
@@ -63,7 +63,7 @@ export function EvidenceMethod({ children, href, title = 'Method' }: { children:
   return (
     <EvidenceSection title={title}>
       <p className="text-table">
-        {children} <Link href={href}>Definition and source</Link>
+        {children} <Link prefetch={false} href={href}>Definition and source</Link>
       </p>
     </EvidenceSection>
   );

@@ -42,7 +42,7 @@ export function ImportRows({ imports }: { imports: ImportView[] }) {
           return (
             <tr key={row.id} className="align-top hover:bg-paper">
               <th scope="row" className="py-3 pr-2 text-left font-normal">
-                <Link href={`/portfolios/${row.portfolioId}/imports/${row.id}`} className="font-mono text-small break-all text-ink no-underline hover:underline">{row.fileName}</Link>
+                <Link prefetch={false} href={`/portfolios/${row.portfolioId}/imports/${row.id}`} className="font-mono text-small break-all text-ink no-underline hover:underline">{row.fileName}</Link>
                 <p className="text-small text-ink-soft">{[row.format && formatWords[row.format], formatBytes(row.bytes)].filter(Boolean).join(' · ')}</p>
                 <div className="mt-1 md:hidden"><Counts row={row} now={now} /></div>
               </th>

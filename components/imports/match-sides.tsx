@@ -39,7 +39,7 @@ export function MatchSides({ match, leftIsNew }: { match: MatchView; leftIsNew: 
     { label: 'References', left: formatNumber(left.references), right: formatNumber(right.references), whole: true },
   ];
   const head = 'pb-2 pr-3 text-left text-small font-semibold text-ink-soft align-bottom';
-  const title = (side: MatchSide, isNew: boolean) => (isNew ? `In this file, line ${formatNumber(side.line)}` : <>{side.workId ? <><Link href={`/works/${side.workId}`}>Catalogued</Link>, from</> : 'From'} <span className="break-all">{placeOf(side)}</span></>);
+  const title = (side: MatchSide, isNew: boolean) => (isNew ? `In this file, line ${formatNumber(side.line)}` : <>{side.workId ? <><Link prefetch={false} href={`/works/${side.workId}`}>Catalogued</Link>, from</> : 'From'} <span className="break-all">{placeOf(side)}</span></>);
   return (
     <table className="w-full table-fixed border-collapse">
       <caption className="sr-only">The two records side by side</caption>

@@ -29,14 +29,14 @@ export function RecordRows({ records, chosen }: { records: ImportRecordView[]; c
       narrow: 'title',
       cell: (record) => (
         <>
-          <Link href={href({ evidence: `record-${record.id}` })} scroll={false} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{nameOf(record)}</Link>
+          <Link prefetch={false} href={href({ evidence: `record-${record.id}` })} scroll={false} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{nameOf(record)}</Link>
           <span className="block text-small text-ink-soft">{[record.authors, record.year].filter((part) => part !== null).join(' · ')}</span>
         </>
       ),
     },
     { id: 'outcome', head: 'Outcome', width: '11rem', cell: (record) => (record.outcome ? <Pill tone={outcomes[record.outcome].tone}>{outcomes[record.outcome].words}</Pill> : '–') },
     { id: 'references', head: 'References', numeric: true, width: '7rem', cell: (record) => formatNumber(record.references) },
-    { id: 'work', head: 'Work', width: '5rem', cell: (record) => (record.workId ? <Link href={`/works/${record.workId}`} aria-label={`The work of ${nameOf(record)}`}>open</Link> : '–') },
+    { id: 'work', head: 'Work', width: '5rem', cell: (record) => (record.workId ? <Link prefetch={false} href={`/works/${record.workId}`} aria-label={`The work of ${nameOf(record)}`}>open</Link> : '–') },
   ];
   return <DataTable caption="Records of this file" columns={columns} rows={records} rowKey={(record) => record.id} selectedKey={chosen} onOpen={(record) => go({ evidence: `record-${record.id}` })} />;
 }

@@ -49,7 +49,7 @@ export function MapTable({ map, visible, selected, links, onSelect }: MapTablePr
         id: 'title', head: 'Work', sort: 'title', fixed: true, narrow: 'title',
         cell: (work) => (
           <span className="grid gap-0.5">
-            <Link href={`/works/${map.ids[work]}`} className="font-serif text-work font-medium text-ink no-underline hover:underline">{workName({ title: map.titles[work], authors: map.authors[work], year: map.years[work] })}</Link>
+            <Link prefetch={false} href={`/works/${map.ids[work]}`} className="font-serif text-work font-medium text-ink no-underline hover:underline">{workName({ title: map.titles[work], authors: map.authors[work], year: map.years[work] })}</Link>
             <span className="text-small text-ink-soft">{[map.authors[work], map.catalogued[work] ? null : 'cited only'].filter((part) => part !== null).join(' · ')} {map.retracted[work] && <Pill tone="problem">Retracted</Pill>}</span>
           </span>
         ),

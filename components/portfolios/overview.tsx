@@ -30,7 +30,7 @@ function Evidence({ figure, portfolio }: { figure: CoverageFigure; portfolio: Po
       <p className="text-table">{definition}</p>
       <EvidenceRows rows={counted} />
       {caution && <EvidenceCaution href="/methods#coverage">{caution}</EvidenceCaution>}
-      {worksQuery !== null && <Link href={`/portfolios/${portfolio.id}/works${worksQuery}`} className="text-table">{worksLabel}</Link>}
+      {worksQuery !== null && <Link prefetch={false} href={`/portfolios/${portfolio.id}/works${worksQuery}`} className="text-table">{worksLabel}</Link>}
     </EvidencePanel>
   );
 }
@@ -63,7 +63,7 @@ export function Overview({ initial, units, may }: OverviewProps) {
               const { value, label, beside } = explainFigure(name, portfolio.coverage);
               return (
                 <li key={name} className={figure === name ? '-ml-3 border-l-[3px] border-weld pl-[9px]' : ''}>
-                  <Link href={href({ evidence: name })} scroll={false} aria-current={figure === name ? 'true' : undefined} className="grid w-fit gap-0.5">
+                  <Link prefetch={false} href={href({ evidence: name })} scroll={false} aria-current={figure === name ? 'true' : undefined} className="grid w-fit gap-0.5">
                     <span className="font-serif text-[1.75rem] leading-[2rem]">{value}</span>
                     <span className="text-table">{label}</span>
                   </Link>

@@ -24,7 +24,7 @@ function Title({ work }: { work: AnalysisWorkItem }) {
   return (
     <span className="grid gap-0.5">
       <span className="font-serif text-work font-medium [overflow-wrap:anywhere]">
-        <Link href={`/works/${work.id}`} className="text-ink no-underline hover:underline">{workName(work)}</Link>
+        <Link prefetch={false} href={`/works/${work.id}`} className="text-ink no-underline hover:underline">{workName(work)}</Link>
         {work.retracted && <span className="ml-2 align-middle font-sans"><Pill tone="problem">Retracted</Pill></span>}
       </span>
       <span className="text-small text-ink-soft">

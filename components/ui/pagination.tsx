@@ -29,7 +29,7 @@ const box = 'inline-grid min-h-8 min-w-8 place-items-center rounded-sm border px
 function Step({ href, label, children }: { href: string | null; label: string; children: ReactNode }) {
   if (href === null) return <span aria-hidden="true" className={`${box} border-transparent opacity-40`}>{children}</span>;
   return (
-    <Link href={href} aria-label={label} className={`${box} border-transparent text-indigo hover:border-thread-strong`}>
+    <Link prefetch={false} href={href} aria-label={label} className={`${box} border-transparent text-indigo hover:border-thread-strong`}>
       {children}
     </Link>
   );
@@ -56,6 +56,7 @@ export function Pagination({ page, pageSize, total, hrefOf, pageSizes = [], labe
                 <span aria-hidden="true" className="px-1">…</span>
               ) : (
                 <Link
+                  prefetch={false}
                   href={hrefOf({ page: one })}
                   aria-label={`Page ${formatNumber(one)}`}
                   aria-current={one === page ? 'page' : undefined}
@@ -78,6 +79,7 @@ export function Pagination({ page, pageSize, total, hrefOf, pageSizes = [], labe
           Rows on a page:
           {pageSizes.map((size) => (
             <Link
+              prefetch={false}
               key={size}
               href={hrefOf({ pageSize: size })}
               aria-current={size === pageSize ? 'true' : undefined}

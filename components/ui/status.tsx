@@ -19,7 +19,7 @@ export function Pill({ tone = 'neutral', children }: { tone?: Tone; children: Re
 /** A pill that filters; `href` reproduces the view. */
 export function PillLink({ tone = 'neutral', href, current, children }: { tone?: Tone; href: string; current?: boolean; children: ReactNode }) {
   return (
-    <Link href={href} scroll={false} aria-current={current ? 'true' : undefined} className={clsx('inline-flex min-h-6 items-center rounded-full border px-2.5 py-px text-head leading-[1.125rem] whitespace-nowrap no-underline hover:underline aria-[current]:ring-1 aria-[current]:ring-current', tones[tone])}>
+    <Link prefetch={false} href={href} scroll={false} aria-current={current ? 'true' : undefined} className={clsx('inline-flex min-h-6 items-center rounded-full border px-2.5 py-px text-head leading-[1.125rem] whitespace-nowrap no-underline hover:underline aria-[current]:ring-1 aria-[current]:ring-current', tones[tone])}>
       {children}
     </Link>
   );
@@ -29,7 +29,7 @@ export function PillLink({ tone = 'neutral', href, current, children }: { tone?:
 export function Caution({ children, href = '/methods#cautions' }: { children: ReactNode; href?: string | null }) {
   return (
     <p className="border-l-[3px] border-weld py-0.5 pl-2.5 text-small text-ink-soft">
-      {children} {href && <Link href={href} className="ml-1 whitespace-nowrap">Cautions</Link>}
+      {children} {href && <Link prefetch={false} href={href} className="ml-1 whitespace-nowrap">Cautions</Link>}
     </p>
   );
 }

@@ -13,7 +13,7 @@ interface WorkLineProps {
 export function WorkLine({ work, yearElsewhere = false }: WorkLineProps) {
   return (
     <div className="min-w-0">
-      <Link href={`/works/${work.id}`} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{titleOf(work)}</Link>
+      <Link prefetch={false} href={`/works/${work.id}`} className="font-serif text-work text-ink no-underline [overflow-wrap:anywhere] hover:underline">{titleOf(work)}</Link>
       <span className="ml-2 inline-flex gap-1.5 align-middle">
         {work.retracted && <Pill tone="problem">retracted</Pill>}
         {!work.catalogued && <Pill>cited only</Pill>}

@@ -28,7 +28,7 @@ function Records({ work, chosen }: { work: WorkDetail; chosen: string | null }) 
         <ul className="-mt-2 divide-y divide-thread border-b border-thread">
           {work.records.map((record) => (
             <li key={record.id} className={`flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1 py-2 ${chosen === record.id ? 'bg-weld-wash' : ''}`}>
-              <Link href={href({ evidence: `record-${record.id}` })} scroll={false} className="font-mono text-small break-all">{record.fileName} <span className="whitespace-nowrap">line {formatNumber(record.line)}</span></Link>
+              <Link prefetch={false} href={href({ evidence: `record-${record.id}` })} scroll={false} className="font-mono text-small break-all">{record.fileName} <span className="whitespace-nowrap">line {formatNumber(record.line)}</span></Link>
               <span className="text-small text-ink-soft">{[record.format && (formatWords[record.format] ?? record.format), count(record.references, 'reference')].filter(Boolean).join(', ')}</span>
             </li>
           ))}
@@ -55,7 +55,7 @@ function Standings({ work }: { work: WorkDetail }) {
         <TableBody>
           {work.standings.map((standing) => (
             <tr key={standing.analysisId}>
-              <RowHead><Link href={`/portfolios/${standing.portfolioId}/rankings`}>{standing.portfolioName}</Link></RowHead>
+              <RowHead><Link prefetch={false} href={`/portfolios/${standing.portfolioId}/rankings`}>{standing.portfolioName}</Link></RowHead>
               <Cell numeric>{formatNumber(standing.rank)} <span className="text-small text-ink-soft">({formatNumber(standing.rankLow)}–{formatNumber(standing.rankHigh)})</span></Cell>
               <Cell numeric>{formatDecimal(standing.pageRank)}</Cell>
               <Cell numeric>{formatNumber(standing.inDegree)}</Cell>

@@ -40,9 +40,9 @@ function columnsOf(selection: ReturnType<typeof useSelection> | null, pageIds: s
     { id: 'title', head: 'Work', sort: 'title', fixed: true, narrow: 'title', cell: (work) => <WorkLine work={work} yearElsewhere /> },
     { id: 'year', head: 'Year', sort: 'year', highestFirst: true, numeric: true, width: '5rem', cell: (work) => work.year ?? '–' },
     { id: 'type', head: 'Type', width: '8rem', hiddenAtFirst: true, cell: (work) => typeWords[work.type] },
-    { id: 'references', head: 'References', sort: 'references', highestFirst: true, numeric: true, width: '7rem', cell: (work) => (work.references > 0 ? <Link href={`/works/${work.id}#references`} aria-label={`${formatNumber(work.references)} references of ${titleOf(work)}`}>{formatNumber(work.references)}</Link> : '0') },
-    { id: 'citationsHere', head: 'Citations here', sort: 'citationsHere', highestFirst: true, numeric: true, width: '8rem', cell: (work) => (work.citationsHere > 0 ? <Link href={`/works/${work.id}#cited-by`} aria-label={`${formatNumber(work.citationsHere)} citations here of ${titleOf(work)}`}>{formatNumber(work.citationsHere)}</Link> : '0') },
-    { id: 'records', head: 'Records', numeric: true, width: '6rem', narrow: 'hidden', cell: (work) => (work.records > 0 ? <Link href={`/works/${work.id}#records`} aria-label={`${formatNumber(work.records)} records of ${titleOf(work)}`}>{formatNumber(work.records)}</Link> : '0') },
+    { id: 'references', head: 'References', sort: 'references', highestFirst: true, numeric: true, width: '7rem', cell: (work) => (work.references > 0 ? <Link prefetch={false} href={`/works/${work.id}#references`} aria-label={`${formatNumber(work.references)} references of ${titleOf(work)}`}>{formatNumber(work.references)}</Link> : '0') },
+    { id: 'citationsHere', head: 'Citations here', sort: 'citationsHere', highestFirst: true, numeric: true, width: '8rem', cell: (work) => (work.citationsHere > 0 ? <Link prefetch={false} href={`/works/${work.id}#cited-by`} aria-label={`${formatNumber(work.citationsHere)} citations here of ${titleOf(work)}`}>{formatNumber(work.citationsHere)}</Link> : '0') },
+    { id: 'records', head: 'Records', numeric: true, width: '6rem', narrow: 'hidden', cell: (work) => (work.records > 0 ? <Link prefetch={false} href={`/works/${work.id}#records`} aria-label={`${formatNumber(work.records)} records of ${titleOf(work)}`}>{formatNumber(work.records)}</Link> : '0') },
     { id: 'doi', head: 'DOI', width: '14rem', hiddenAtFirst: true, narrow: 'wide', cell: (work) => (work.doi ? <span className="font-mono text-small break-all">{work.doi}</span> : '–') },
   ];
 }
@@ -98,7 +98,7 @@ export function WorksPage({ portfolioId, initial, mayCurate }: WorksPageProps) {
           filtered ? (
             <EmptyState title="No work is like that" action={<Button onClick={() => set({ filters: Object.fromEntries(filterNames.map((name) => [name, null])) })}>Clear the filters</Button>}>Every word must occur in title, authors, venue, year or keywords; a DOI must be whole.</EmptyState>
           ) : (
-            <EmptyState title="No works yet">{mayCurate ? <>Works come with imports. <Link href={`/portfolios/${portfolioId}/imports`}>Import what you have</Link></> : 'Works come with imports, which librarians make.'}</EmptyState>
+            <EmptyState title="No works yet">{mayCurate ? <>Works come with imports. <Link prefetch={false} href={`/portfolios/${portfolioId}/imports`}>Import what you have</Link></> : 'Works come with imports, which librarians make.'}</EmptyState>
           )
         }
       />
