@@ -35,11 +35,13 @@ function Evidence({ figure, portfolio }: { figure: CoverageFigure; portfolio: Po
   );
 }
 
+const whileImportsAreOpen = (portfolio: PortfolioDetail | undefined) => (portfolio && portfolio.imports.open > 0 ? 5000 : 0);
+
 const isFigure = (text: string | null): text is CoverageFigure => (coverageFigures as readonly (string | null)[]).includes(text);
 
 /** What is in the portfolio, how well it is covered, and what to do next. */
 export function Overview({ initial, units, may }: OverviewProps) {
-  const { data: portfolio = initial, mutate } = usePortfolio(initial.id, { fallbackData: initial, refreshInterval: (data) => (data && data.imports.open > 0 ? 5000 : 0) });
+  const { data: portfolio = initial, mutate } = usePortfolio(initial.id, { fallbackData: initial, refreshInterval: whileImportsAreOpen });
   const { search, href } = useAddress();
   const chosen = search.get('evidence');
   const figure = isFigure(chosen) ? chosen : null;

@@ -1,5 +1,7 @@
 'use client';
 
+import { useMemo } from 'react';
+
 import useSWR, { type SWRConfiguration, type SWRResponse } from 'swr';
 
 import { fetchJson, type ApiProblem } from '@/lib/api/client';
@@ -33,14 +35,19 @@ export function apiPath(path: string, query: Query = {}): string {
 /**
  * Reads a route of the API. `fallbackData` is what the server knew when it drew the page: with it the first paint needs no spinner.
  * The answer to a former question stays in view while the next one is on its way.
+ *
+ * `refreshInterval` must be the same function at every rendering: SWR starts its timer anew for another one, and a page that renders every
+ * second would never see it run out.
  */
 export function useApi<Result>(path: string | null, options: SWRConfiguration<Result, ApiProblem> = {}): SWRResponse<Result, ApiProblem> {
+  const { refreshInterval, fallbackData } = options;
+  const interval = useMemo(() => startFromFallback(refreshInterval, fallbackData as Result | undefined), [refreshInterval, fallbackData]);
   return useSWR<Result, ApiProblem>(path, fetchJson<Result>, {
     keepPreviousData: true,
     // 4xx do not change by asking again.
     shouldRetryOnError: (error: ApiProblem) => error.status === 0 || error.status >= 500,
     ...options,
-    refreshInterval: startFromFallback(options.refreshInterval, options.fallbackData as Result | undefined),
+    refreshInterval: interval,
   });
 }
 
@@ -62,11 +69,13 @@ export const useCitingWorks = (workId: string, query: Query, options?: Options<P
 const moving = new Set<ImportView['state']>(['uploaded', 'reading', 'checking', 'accepting', 'undoing']);
 export const importMoves = (row: ImportView): boolean => moving.has(row.state) || (row.progress.stage?.startsWith('undoing') ?? false);
 const pollInterval = 1000;
+const whileImportsMove = (page: Page<ImportView> | undefined) => (page?.items.some(importMoves) ? pollInterval : 0);
+const whileImportMoves = (row: ImportView | undefined) => (row && importMoves(row) ? pollInterval : 0);
 
 export const useImports = (portfolioId: string, query: Query, options?: Options<Page<ImportView>>) =>
-  useApi(apiPath(`/api/portfolios/${portfolioId}/imports`, query), { refreshInterval: (page) => (page?.items.some(importMoves) ? pollInterval : 0), ...options });
+  useApi(apiPath(`/api/portfolios/${portfolioId}/imports`, query), { refreshInterval: whileImportsMove, ...options });
 
-export const useImport = (importId: string, options?: Options<ImportView>) => useApi(`/api/imports/${importId}`, { refreshInterval: (row) => (row && importMoves(row) ? pollInterval : 0), ...options });
+export const useImport = (importId: string, options?: Options<ImportView>) => useApi(`/api/imports/${importId}`, { refreshInterval: whileImportMoves, ...options });
 
 export const useImportRecords = (importId: string, query: Query, options?: Options<Page<ImportRecordView>>) => useApi(apiPath(`/api/imports/${importId}/records`, query), options);
 
