@@ -1,11 +1,10 @@
 'use client';
 
-import { useMemo } from 'react';
+import { useState } from 'react';
 
 import useSWR, { type SWRConfiguration, type SWRResponse } from 'swr';
 
 import { fetchJson, type ApiProblem } from '@/lib/api/client';
-import { startFromFallback } from '@/lib/api/polling';
 import { type Page } from '@/lib/api/schemas';
 import {
   type ImportProblemView,
@@ -36,19 +35,21 @@ export function apiPath(path: string, query: Query = {}): string {
  * Reads a route of the API. `fallbackData` is what the server knew when it drew the page: with it the first paint needs no spinner.
  * The answer to a former question stays in view while the next one is on its way.
  *
- * `refreshInterval` must be the same function at every rendering: SWR starts its timer anew for another one, and a page that renders every
- * second would never see it run out.
+ * A function given as `refreshInterval` decides by what is shown. SWR itself would ask it only when it starts its timer, and start the timer
+ * anew for every other function; so it is given the number.
  */
-export function useApi<Result>(path: string | null, options: SWRConfiguration<Result, ApiProblem> = {}): SWRResponse<Result, ApiProblem> {
-  const { refreshInterval, fallbackData } = options;
-  const interval = useMemo(() => startFromFallback(refreshInterval, fallbackData as Result | undefined), [refreshInterval, fallbackData]);
-  return useSWR<Result, ApiProblem>(path, fetchJson<Result>, {
+export function useApi<Result>(path: string | null, { refreshInterval, ...options }: SWRConfiguration<Result, ApiProblem> = {}): SWRResponse<Result, ApiProblem> {
+  const [interval, setInterval] = useState(0);
+  const answer = useSWR<Result, ApiProblem>(path, fetchJson<Result>, {
     keepPreviousData: true,
     // 4xx do not change by asking again.
     shouldRetryOnError: (error: ApiProblem) => error.status === 0 || error.status >= 500,
     ...options,
     refreshInterval: interval,
   });
+  const wanted = typeof refreshInterval === 'function' ? refreshInterval(answer.data) : (refreshInterval ?? 0);
+  if (wanted !== interval) setInterval(wanted);
+  return answer;
 }
 
 type Options<Result> = SWRConfiguration<Result, ApiProblem>;
