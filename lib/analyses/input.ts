@@ -1,7 +1,12 @@
 import { gunzipSync, gzipSync } from 'node:zlib';
 
+import { Transaction } from 'sequelize';
+
+import { standingMember } from '@/lib/catalogue/reading/work-items';
 import { select, selectIn } from '@/lib/db/bulk';
+import { database } from '@/lib/db/connection';
 import { type AnalysisInput, type AnalysisWorkInput } from '@/lib/network/types';
+import { readCoverage } from '@/lib/portfolios/coverage';
 import { storage } from '@/lib/services/storage';
 import { type AnalysisCoverage } from '@/models/analysis';
 
@@ -23,18 +28,22 @@ interface WorkRow {
 
 const keywordsOf = (value: WorkRow['keywords']): string[] => (typeof value === 'string' ? (JSON.parse(value) as string[]) : (value ?? []));
 
-/** Members of the portfolio, everything that they cite, and the citations, read in keyset batches. */
+/** Members of the portfolio, everything that they cite, and the citations, read in keyset batches, all as they stood at one moment. */
 export async function loadNetwork(portfolioId: number): Promise<LoadedNetwork> {
+  return database().transaction({ isolationLevel: Transaction.ISOLATION_LEVELS.REPEATABLE_READ }, (snapshot) => readNetwork(snapshot, portfolioId));
+}
+
+async function readNetwork(snapshot: Transaction, portfolioId: number): Promise<LoadedNetwork> {
   const members = await select<{ id: number }>(
-    null,
-    "SELECT work.id FROM portfolio_works membership JOIN works work ON work.id = membership.workId AND work.catalogued = 1 WHERE membership.portfolioId = ? AND membership.membership <> 'removed' ORDER BY work.id",
-    [portfolioId],
+    snapshot,
+    `SELECT work.id FROM portfolio_works membership JOIN works work ON work.id = membership.workId AND work.catalogued = 1 WHERE ${standingMember} ORDER BY work.id`,
+    { portfolioId },
   );
   const memberIds = members.map((row) => row.id);
   const citingIds: number[] = [];
   const citedIds: number[] = [];
   for (let from = 0; from < memberIds.length; from += 1_000) {
-    const rows = await select<{ citingWorkId: number; citedWorkId: number }>(null, 'SELECT citingWorkId, citedWorkId FROM citations WHERE citingWorkId IN (?)', [memberIds.slice(from, from + 1_000)]);
+    const rows = await select<{ citingWorkId: number; citedWorkId: number }>(snapshot, 'SELECT citingWorkId, citedWorkId FROM citations WHERE citingWorkId IN (?)', [memberIds.slice(from, from + 1_000)]);
     for (const row of rows) {
       citingIds.push(row.citingWorkId);
       citedIds.push(row.citedWorkId);
@@ -44,7 +53,7 @@ export async function loadNetwork(portfolioId: number): Promise<LoadedNetwork> {
   const workIds = [...new Set([...memberIds, ...citedIds])].sort((a, b) => a - b);
   const indexOf = new Map(workIds.map((id, index) => [id, index]));
   const works: AnalysisWorkInput[] = new Array(workIds.length);
-  const rows = await selectIn<WorkRow, number>(null, 'SELECT id, workKey, year, catalogued, title, keywords FROM works WHERE id IN (?)', workIds);
+  const rows = await selectIn<WorkRow, number>(snapshot, 'SELECT id, workKey, year, catalogued, title, keywords FROM works WHERE id IN (?)', workIds);
   for (const row of rows) {
     works[indexOf.get(row.id) as number] = {
       key: row.workKey.toString('hex'),
@@ -62,29 +71,13 @@ export async function loadNetwork(portfolioId: number): Promise<LoadedNetwork> {
 }
 
 export async function measureCoverage(portfolioId: number): Promise<AnalysisCoverage> {
-  const [works] = await select<{ cataloguedWorks: number; worksWithReferences: number; worksWithoutYear: number }>(
+  const { cataloguedWorks, worksWithReferences, references, linkedReferences } = await readCoverage(portfolioId);
+  const [{ worksWithoutYear }] = await select<{ worksWithoutYear: number }>(
     null,
-    `SELECT COUNT(*) AS cataloguedWorks, COALESCE(SUM(work.referenceCount > 0), 0) AS worksWithReferences, COALESCE(SUM(work.year IS NULL), 0) AS worksWithoutYear
-     FROM portfolio_works membership JOIN works work ON work.id = membership.workId AND work.catalogued = 1
-     WHERE membership.portfolioId = ? AND membership.membership <> 'removed'`,
-    [portfolioId],
+    `SELECT COUNT(*) AS worksWithoutYear FROM portfolio_works membership JOIN works work ON work.id = membership.workId AND work.catalogued = 1 WHERE ${standingMember} AND work.year IS NULL`,
+    { portfolioId },
   );
-  const [references] = await select<{ total: number; linked: number }>(
-    null,
-    `SELECT COUNT(*) AS total, COALESCE(SUM(cited.catalogued = 1), 0) AS linked
-     FROM portfolio_works membership JOIN import_records record ON record.workId = membership.workId AND record.citing = 1
-     JOIN cited_references reference ON reference.recordId = record.id
-     JOIN reference_variants variant ON variant.hash = reference.variantHash LEFT JOIN works cited ON cited.id = variant.workId
-     WHERE membership.portfolioId = ? AND membership.membership <> 'removed'`,
-    [portfolioId],
-  );
-  return {
-    cataloguedWorks: Number(works.cataloguedWorks),
-    worksWithReferences: Number(works.worksWithReferences),
-    references: Number(references.total),
-    linkedReferences: Number(references.linked),
-    worksWithoutYear: Number(works.worksWithoutYear),
-  };
+  return { cataloguedWorks, worksWithReferences, references, linkedReferences, worksWithoutYear: Number(worksWithoutYear) };
 }
 
 const inputKey = (analysisId: number) => `analyses/${analysisId}/input.json.gz`;

@@ -113,7 +113,7 @@ export const definitions: { heading: string; entries: Definition[] }[] = [
       {
         id: 'clusters',
         name: 'Clusters',
-        definition: 'Groups with more links inside than their sizes would give by chance (modularity at the chosen resolution), found by the Leiden method or, on request, the Louvain method. Many starts are tried and the best partition is kept. Works without a link belong to no cluster.',
+        definition: 'Groups with more links inside than their sizes would give by chance (modularity at the chosen resolution), found by the Leiden method or, on request, the Louvain method. Many starts are tried and the best partition is kept. By co-citation and coupling, clusters rest on the 30 strongest links of each work, seen from either end; by direct citation on all of them. Works without a link belong to no cluster.',
         misleads: 'Clusters depend on the basis, the similarity and the resolution; small ones are swallowed at low resolution. Even a random network has some.',
         sources: [
           { text: 'Newman & Girvan (2004), Finding and evaluating community structure in networks, Physical Review E 69:026113', doi: '10.1103/PhysRevE.69.026113' },
