@@ -61,7 +61,8 @@ export function recordKeys(fields: RecordFields): RecordKeys {
   if (title && year && family) fingerprint = telling ? `fp:${title}|${year}|${family}` : `fp:${title}|${year}|${family}|${volume}|${page}`;
   else {
     const everything = [title, year, fields.authors.map((name) => firstNames(name).full).join(' '), normaliseText(fields.venue ?? ''), volume, page, normaliseText(fields.publisher ?? ''), fields.url ?? ''];
-    if (everything.some((part) => part !== '')) fingerprint = `ct:${everything.join('|')}`;
+    // Two entries that say nothing but "Introduction" are not one work: what is the same must also tell.
+    if (telling || (volume && page) || fields.url) fingerprint = `ct:${everything.join('|')}`;
   }
 
   const referenceKeys = new Set<string>();

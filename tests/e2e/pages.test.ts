@@ -39,7 +39,7 @@ async function addresses(page: Page, role: Role): Promise<string[]> {
   const reviewed = imports.items.find((item) => item.counts.review > 0) ?? imports.items[0];
   const shared = ['/portfolios', base, `${base}/imports`, `${base}/imports/${reviewed.id}`, `${base}/works`, `/works/${works.items[0].id}`, `${base}/rankings`, `${base}/clusters`, `${base}/map`, `${base}/analyses`, `${base}/analyses/${analyses.items[0].id}`, '/methods', '/account'];
   if (role === 'librarian') return [...shared, `${base}/imports/matches`, `${base}/rankings?evidence=inDegree:${works.items[0].id}`];
-  if (role === 'evaluator') return [`${base}/analyses/new`, `${base}/rankings?sort=-inDegree`, `${base}/map?table=1`];
+  if (role === 'evaluator') return [`${base}/analyses/new`, `${base}/rankings?sort=-inDegree`, `${base}/map?view=table`];
   return ['/admin', '/admin/units', '/admin/mail', '/admin/audit'];
 }
 
