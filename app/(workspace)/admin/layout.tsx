@@ -1,6 +1,6 @@
 import { type ReactNode } from 'react';
 
-import { SectionLinks } from '@/components/access/section-links';
+import { SectionRow } from '@/components/frame/section-row';
 import { actorForPageOf } from '@/lib/access/actor';
 
 const sections = [
@@ -15,7 +15,7 @@ export default async function AdminLayout({ children }: { children: ReactNode })
   await actorForPageOf('user.manage');
   return (
     <>
-      <SectionLinks label="Administration" sections={sections} />
+      <SectionRow label="Administration" items={sections} />
       <div className="grid max-w-[80rem] gap-8 px-4 py-6 sm:px-7">{children}</div>
     </>
   );
