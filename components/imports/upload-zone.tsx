@@ -32,7 +32,7 @@ export function UploadZone({ portfolioId, onArrived }: UploadZoneProps) {
         <Button kind="primary" onClick={open}>
           <Icon name="upload" /> Choose files
         </Button>
-        <p className="max-w-[40rem] text-small text-ink-soft">{formats.map((name) => formatWords[name] ?? name).join(', ')}; up to 2 GiB a file. The format is found by itself.</p>
+        <p className="max-w-[40rem] text-small text-ink-soft">{formats.map((name) => formatWords[name] ?? name).join(', ')}; zip and gz archives of them; up to 2 GiB a file. The format is found by itself.</p>
         <details className="text-small">
           <summary className="text-indigo underline underline-offset-2">Choose the format instead</summary>
           <SelectField label="Read the next files as" value={format} onChange={(event) => setFormat(event.target.value)} className="mt-2 text-left">

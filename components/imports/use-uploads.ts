@@ -45,7 +45,8 @@ export function useUploads(portfolioId: string, onArrived: () => void) {
     const send = async ({ key, file, format }: Upload) => {
       try {
         const { items } = await sendFiles<Page<ImportView>>(`/api/portfolios/${portfolioId}/imports`, [file], format ? { format } : {}, { onProgress: (sent) => change(key, { sent: Math.min(sent, file.size) }) });
-        if (items[0].alreadyThere) change(key, { state: 'already', earlier: items[0] });
+        // An archive brings several; it leaves the queue when any of them is new.
+        if (items.every((one) => one.alreadyThere)) change(key, { state: 'already', earlier: items[0] });
         else queue.current = queue.current.filter((one) => one.key !== key);
         onArrived();
       } catch (error) {

@@ -6,13 +6,14 @@ import busboy from 'busboy';
 import { type Actor } from '@/lib/access/permissions';
 import { formats, type Format } from '@/lib/bibliography/record';
 import { invalid, unsupported } from '@/lib/errors';
-import { receiveUpload, type ReceivedImport } from '@/lib/imports/uploads';
+import { receiveFile } from '@/lib/imports/archives';
+import { type ReceivedImport } from '@/lib/imports/uploads';
 
 const filesAtOnce = 100;
 
 /**
  * Takes a multipart upload apart as it comes in: each file goes straight to storage, nothing is held in memory.
- * An optional field `format` before the files chooses the format of those that follow.
+ * A zip archive gives an import for every file in it. An optional field `format` before the files chooses the format of those that follow.
  */
 export async function receiveFiles(actor: Actor, portfolioId: number, request: Request, autoAccept: boolean): Promise<ReceivedImport[]> {
   const type = request.headers.get('content-type') ?? '';
@@ -24,7 +25,7 @@ export async function receiveFiles(actor: Actor, portfolioId: number, request: R
     throw unsupported('The multipart body names no boundary.');
   }
   let format: Format | null = null;
-  const received: Promise<ReceivedImport>[] = [];
+  const received: Promise<ReceivedImport[]>[] = [];
   const settled = new Promise<void>((resolve, reject) => {
     parser.on('field', (name, value) => {
       if (name !== 'format' || value === '') return;
@@ -36,7 +37,7 @@ export async function receiveFiles(actor: Actor, portfolioId: number, request: R
         stream.resume();
         return;
       }
-      const one = receiveUpload(actor, portfolioId, { name: information.filename ?? 'unnamed', content: stream }, { format, autoAccept });
+      const one = receiveFile(actor, portfolioId, { name: information.filename ?? 'unnamed', content: stream }, { format, autoAccept });
       // The file that fails must not stall the parser: what is left of it is read and thrown away.
       one.catch((error: unknown) => {
         stream.resume();
@@ -60,5 +61,5 @@ export async function receiveFiles(actor: Actor, portfolioId: number, request: R
     throw error;
   }
   if (received.length === 0) throw invalid('No file came with the request; the field is called "files".', { files: 'missing' });
-  return Promise.all(received);
+  return (await Promise.all(received)).flat();
 }
