@@ -11,6 +11,7 @@ export const formatWords: Record<string, string> = {
   tagged: 'tagged text with cited references',
   'registry-json': 'DOI registry JSON',
   nbib: 'MEDLINE (nbib)',
+  delimited: 'delimited table (CSV, TSV)',
   refer: 'refer (%-tagged)',
   jats: 'JATS XML',
   'pubmed-xml': 'PubMed XML',

@@ -1,3 +1,4 @@
+import { readTableHead } from '@/lib/bibliography/readers/delimited-columns';
 import { type Format } from '@/lib/bibliography/record';
 
 interface Guess {
@@ -42,6 +43,9 @@ export function detectFormat(head: string): Guess | null {
   if (json) return json;
   // Markup may quote entries of any format in its text.
   if (/^\s{0,999}<(?:[?!]|[a-z])/i.test(text)) return null;
+  const first = /^(?:\s{0,99}"?sep=.{1,2}\n)?\s{0,99}(\S[^\n]{0,20000})/i.exec(text);
+  // A line that names title and two columns more is the head of a table, whatever its cells quote.
+  if (first && (readTableHead(first[1])?.columns.filter((kind) => kind !== null).length ?? 0) >= 3) return { format: 'delimited', certainty: 0.9 };
   const scores = [...scoreLines(text)];
   const [format, score] = scores.reduce((best, one) => (one[1] > best[1] ? one : best));
   if (score < 1) return null;

@@ -6,7 +6,7 @@
  */
 
 /** The formats that Heddle reads, by the name used in the API and stored with an import. */
-export const formats = ['bibtex', 'ris', 'csl-json', 'tagged', 'registry-json', 'nbib', 'refer'] as const;
+export const formats = ['bibtex', 'ris', 'csl-json', 'tagged', 'registry-json', 'nbib', 'refer', 'delimited'] as const;
 export type Format = (typeof formats)[number];
 
 /** What kind of thing a work is. Reader types that fit none become 'other'. */

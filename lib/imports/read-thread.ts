@@ -58,7 +58,7 @@ async function readFile(request: ReadRequest, send: (message: ThreadMessage) => 
   let bytes = 0;
   const open = () => {
     const detected = format ? { format } : detectFormat(head);
-    if (!detected) throw new Refusal('The format was not recognised. Heddle reads BibTeX, RIS, CSL-JSON, tagged text exports with cited references, MEDLINE/nbib, %-tagged (refer) text and DOI-registry JSON; choose the format and read the file again, or export it anew.');
+    if (!detected) throw new Refusal('The format was not recognised. Heddle reads BibTeX, RIS, CSL-JSON, tagged text exports with cited references, MEDLINE/nbib, %-tagged (refer) text, DOI-registry JSON and tables (CSV, TSV) whose first line names their columns; choose the format and read the file again, or export it anew.');
     format = detected.format;
     reader = createReader(detected.format, {
       onEntry: (entry) => builder.addEntry(entry),

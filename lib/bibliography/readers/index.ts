@@ -2,13 +2,14 @@ import { defaultLimits, type Entry, type Format, type Problem, type ReadLimits, 
 import { type Reader } from '@/lib/bibliography/readers/builder';
 import { createBibtexReader } from '@/lib/bibliography/readers/bibtex';
 import { createCslJsonReader } from '@/lib/bibliography/readers/csl-json';
+import { createDelimitedReader } from '@/lib/bibliography/readers/delimited';
 import { createNbibReader } from '@/lib/bibliography/readers/nbib';
 import { createReferReader } from '@/lib/bibliography/readers/refer';
 import { createRegistryJsonReader } from '@/lib/bibliography/readers/registry-json';
 import { createRisReader } from '@/lib/bibliography/readers/ris';
 import { createTaggedReader } from '@/lib/bibliography/readers/tagged';
 
-const readers = { bibtex: createBibtexReader, ris: createRisReader, tagged: createTaggedReader, 'csl-json': createCslJsonReader, 'registry-json': createRegistryJsonReader, nbib: createNbibReader, refer: createReferReader };
+const readers = { bibtex: createBibtexReader, ris: createRisReader, tagged: createTaggedReader, 'csl-json': createCslJsonReader, 'registry-json': createRegistryJsonReader, nbib: createNbibReader, refer: createReferReader, delimited: createDelimitedReader };
 
 /**
  * A reader of one format: text in (LF line ends), entries out as soon as they are complete.
