@@ -1,5 +1,6 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 
+import { type ColumnKind } from '@/lib/bibliography/readers/delimited-columns';
 import { type Format } from '@/lib/bibliography/record';
 import { database } from '@/lib/db/connection';
 
@@ -27,6 +28,8 @@ export class Import extends Model<InferAttributes<Import>, InferCreationAttribut
   declare chosenFormat: CreationOptional<Format | null>;
   declare format: CreationOptional<Format | null>;
   declare encoding: CreationOptional<string | null>;
+  /** Of a table: what a person said its columns hold; null where their heads decide. */
+  declare columns: CreationOptional<(ColumnKind | null)[] | null>;
   declare sha256: string;
   declare bytes: number;
   declare storageKey: string;
@@ -56,6 +59,7 @@ Import.init(
     chosenFormat: { type: DataTypes.STRING(20), allowNull: true },
     format: { type: DataTypes.STRING(20), allowNull: true },
     encoding: { type: DataTypes.STRING(20), allowNull: true },
+    columns: { type: DataTypes.JSON, allowNull: true },
     sha256: { type: DataTypes.CHAR(64), allowNull: false },
     bytes: { type: DataTypes.BIGINT.UNSIGNED, allowNull: false },
     storageKey: { type: DataTypes.STRING(200), allowNull: false },

@@ -4,6 +4,7 @@ export { AnalysisWork } from '@/models/analysis-work';
 export { ApiToken } from '@/models/api-token';
 export { AuditEvent } from '@/models/audit-event';
 export { Citation } from '@/models/citation';
+export { ColumnMapping } from '@/models/column-mapping';
 export { Import } from '@/models/import';
 export { ImportProblem } from '@/models/import-problem';
 export { ImportRecord } from '@/models/import-record';

@@ -3,6 +3,7 @@
 import { useState } from 'react';
 
 import { isUndoing } from '@/components/imports/import-words';
+import { NameColumns } from '@/components/imports/name-columns';
 import { ReadAgain } from '@/components/imports/read-again';
 import { Button } from '@/components/ui/button';
 import { formatNumber } from '@/components/ui/numbers';
@@ -36,6 +37,7 @@ export function ImportActions({ row, onChanged }: { row: ImportView; onChanged: 
         {(state === 'uploaded' || state === 'reading' || state === 'checking') && <Button disabled={sending !== null} onClick={() => act('cancel')}>Stop reading</Button>}
         {(state === 'review' || state === 'failed') && <Button disabled={sending !== null} onClick={() => act('set-aside')}>Set aside</Button>}
         {waits && acceptable > 0 && <Button kind="primary" disabled={sending !== null} onClick={() => act('accept')}>Accept {formatNumber(acceptable)} now</Button>}
+        {waits && row.format === 'delimited' && <NameColumns row={row} onRead={onChanged} />}
         {(waits || state === 'failed') && <ReadAgain row={row} onRead={onChanged} />}
         {state === 'accepted' && !isUndoing(row) && <Button disabled={sending !== null} onClick={() => act('undo')}>Undo import</Button>}
       </div>

@@ -7,6 +7,7 @@ import useSWR, { type SWRConfiguration, type SWRResponse } from 'swr';
 import { fetchJson, type ApiProblem } from '@/lib/api/client';
 import { type Page } from '@/lib/api/schemas';
 import {
+  type ImportColumnsView,
   type ImportProblemView,
   type ImportRecordView,
   type ImportView,
@@ -77,6 +78,8 @@ export const useImports = (portfolioId: string, query: Query, options?: Options<
   useApi(apiPath(`/api/portfolios/${portfolioId}/imports`, query), { refreshInterval: whileImportsMove, ...options });
 
 export const useImport = (importId: string, options?: Options<ImportView>) => useApi(`/api/imports/${importId}`, { refreshInterval: whileImportMoves, ...options });
+
+export const useImportColumns = (importId: string | null) => useApi<ImportColumnsView>(importId && `/api/imports/${importId}/columns`, { revalidateOnFocus: false });
 
 export const useImportRecords = (importId: string, query: Query, options?: Options<Page<ImportRecordView>>) => useApi(apiPath(`/api/imports/${importId}/records`, query), options);
 

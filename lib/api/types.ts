@@ -3,6 +3,7 @@
  * Ids are decimal strings, dates ISO 8601, null means "no value".
  */
 import { type GrantLevel, type Role } from '@/lib/access/permissions';
+import { type ColumnKind } from '@/lib/bibliography/readers/delimited-columns';
 import { type Format, type PersonName, type WorkType } from '@/lib/bibliography/record';
 import { type Basis, type AnalysisParameters } from '@/lib/network/types';
 import { type AnalysisCoverage, type AnalysisSummary } from '@/models/analysis';
@@ -135,6 +136,16 @@ export interface ImportView {
   undoneAt: string | null;
   /** True in the answer to an upload whose file already stands in this portfolio; the import is the earlier one. */
   alreadyThere?: boolean;
+}
+
+/** Of a table: its heads, what they are taken for, and its first rows. */
+export interface ImportColumnsView {
+  delimiter: string;
+  heads: string[];
+  columns: (ColumnKind | null)[];
+  /** What a person said that the columns hold; null where their heads decided. */
+  chosen: (ColumnKind | null)[] | null;
+  rows: string[][];
 }
 
 export interface ImportRecordView {

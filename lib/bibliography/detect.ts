@@ -1,4 +1,5 @@
 import { readTableHead } from '@/lib/bibliography/readers/delimited-columns';
+import { splitCells } from '@/lib/bibliography/readers/delimited-rows';
 import { type Format } from '@/lib/bibliography/record';
 
 interface Guess {
@@ -36,6 +37,15 @@ function scoreLines(text: string): Map<Format, number> {
   ]);
 }
 
+/** A first line that names the title, or the DOI, and two columns more; or one more, with a row below that has as many cells. */
+function looksLikeTable(text: string): boolean {
+  const lines = /^(?:\s{0,99}"?sep=.{1,2}\n)?\s{0,99}(\S[^\n]{0,20000})(?:\n([^\n]{1,20000}))?/i.exec(text);
+  const head = lines && readTableHead(lines[1]);
+  if (!head) return false;
+  const known = head.columns.filter((kind) => kind !== null).length;
+  return known >= 3 || (lines[2] !== undefined && head.heads.length > 2 && splitCells(lines[2], head.delimiter)?.length === head.heads.length);
+}
+
 /** The format by what the text holds; the name of a file is not asked. Null when nothing fits. Pass the first 64 KiB or more. */
 export function detectFormat(head: string): Guess | null {
   const text = head.replace(/^\uFEFF/, '').slice(0, looked);
@@ -43,9 +53,7 @@ export function detectFormat(head: string): Guess | null {
   if (json) return json;
   // Markup may quote entries of any format in its text.
   if (/^\s{0,999}<(?:[?!]|[a-z])/i.test(text)) return null;
-  const first = /^(?:\s{0,99}"?sep=.{1,2}\n)?\s{0,99}(\S[^\n]{0,20000})/i.exec(text);
-  // A line that names title and two columns more is the head of a table, whatever its cells quote.
-  if (first && (readTableHead(first[1])?.columns.filter((kind) => kind !== null).length ?? 0) >= 3) return { format: 'delimited', certainty: 0.9 };
+  if (looksLikeTable(text)) return { format: 'delimited', certainty: 0.9 };
   const scores = [...scoreLines(text)];
   const [format, score] = scores.reduce((best, one) => (one[1] > best[1] ? one : best));
   if (score < 1) return null;

@@ -1,11 +1,13 @@
 import { UniqueConstraintError, type Transaction } from 'sequelize';
 
 import { type Actor } from '@/lib/access/permissions';
+import { type ColumnKind } from '@/lib/bibliography/readers/delimited-columns';
 import { type Format } from '@/lib/bibliography/record';
 import { database } from '@/lib/db/connection';
 import { run } from '@/lib/db/bulk';
 import { conflict } from '@/lib/errors';
 import { moveImportOrRefuse } from '@/lib/imports/states';
+import { rememberColumns } from '@/lib/imports/table-columns';
 import { enqueue, requestCancel } from '@/lib/jobs/queue';
 import { type Import } from '@/models/import';
 
@@ -40,10 +42,11 @@ export async function undoImport(actor: Actor, row: Import): Promise<void> {
   });
 }
 
-/** Reads the stored file again, in another format or encoding. What was read before is dropped; nothing of it was catalogued. */
-export async function readImportAgain(actor: Actor, row: Import, choice: { format?: Format | null; encoding?: string | null }): Promise<void> {
+/** Reads the stored file again, in another format or encoding, or with columns told by a person. What was read before is dropped; nothing of it was catalogued. */
+export async function readImportAgain(actor: Actor, row: Import, choice: { format?: Format | null; encoding?: string | null; columns?: (ColumnKind | null)[] | null }): Promise<void> {
+  if (choice.columns) await rememberColumns(actor.userId, row, choice.columns);
   await claiming(row, async (transaction) => {
-    await moveImportOrRefuse(row, ['review', 'set-aside', 'undone', 'failed'], 'uploaded', { error: null, counts: null, standing: row.sha256, chosenFormat: choice.format ?? null, encoding: choice.encoding ?? null }, transaction);
+    await moveImportOrRefuse(row, ['review', 'set-aside', 'undone', 'failed'], 'uploaded', { error: null, counts: null, standing: row.sha256, chosenFormat: choice.format ?? null, encoding: choice.encoding ?? null, columns: choice.columns ?? null }, transaction);
     await run(transaction, 'DELETE FROM import_records WHERE importId = ?', [row.id]);
     await run(transaction, 'DELETE FROM import_problems WHERE importId = ?', [row.id]);
     await enqueue('import.read', { importId: row.id }, { portfolioId: row.portfolioId, createdById: actor.userId, transaction });

@@ -6,6 +6,7 @@ import { workerData, parentPort } from 'node:worker_threads';
 
 import { createDecoder, detectEncoding, createUtf8Validator, looksBinary } from '@/lib/bibliography/decode';
 import { detectFormat } from '@/lib/bibliography/detect';
+import { type ColumnKind } from '@/lib/bibliography/readers/delimited-columns';
 import { createReader } from '@/lib/bibliography/readers';
 import { type Format } from '@/lib/bibliography/record';
 import { BatchBuilder, type Batch } from '@/lib/imports/rows';
@@ -17,6 +18,8 @@ export interface ReadRequest {
   /** Chosen by a person; null to detect it. */
   format: Format | null;
   encoding: string | null;
+  /** Of a table: what its columns hold; null where their heads decide. */
+  columns: (ColumnKind | null)[] | null;
 }
 
 export type ThreadMessage =
@@ -63,6 +66,7 @@ async function readFile(request: ReadRequest, send: (message: ThreadMessage) => 
     reader = createReader(detected.format, {
       onEntry: (entry) => builder.addEntry(entry),
       onProblem: (problem) => builder.addProblem(problem, null),
+      columns: request.columns ?? undefined,
     });
     reader.write(head);
   };

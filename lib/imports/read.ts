@@ -5,6 +5,7 @@ import { type Transaction } from 'sequelize';
 import { database } from '@/lib/db/connection';
 import { insertRows, run, select, type Cell } from '@/lib/db/bulk';
 import { ExpectedError } from '@/lib/errors';
+import { recallColumns } from '@/lib/imports/table-columns';
 import { variantColumns, variantHashes, type Batch } from '@/lib/imports/rows';
 import { type ReadRequest, type ThreadMessage } from '@/lib/imports/read-thread';
 import { type JobContext } from '@/lib/jobs/context';
@@ -53,7 +54,8 @@ export async function readImport(row: Import, context: JobContext): Promise<void
   // A reading that was broken off (a killed worker) begins anew: entries that inherit come out of order, so there is no place to go on from.
   await run(null, 'DELETE FROM import_records WHERE importId = ?', [row.id]);
   await run(null, 'DELETE FROM import_problems WHERE importId = ?', [row.id]);
-  const request: ReadRequest = { storageKey: row.storageKey, format: row.chosenFormat, encoding: row.encoding };
+  const columns = row.columns ?? (await recallColumns(row));
+  const request: ReadRequest = { storageKey: row.storageKey, format: row.chosenFormat, encoding: row.encoding, columns };
   const thread = startThread(new URL('./read-thread.ts', import.meta.url), request, threadMegabytes);
   const stop = () => void thread.terminate();
   context.signal.addEventListener('abort', stop);

@@ -3,7 +3,7 @@ import { type Transaction } from 'sequelize';
 import { conflict } from '@/lib/errors';
 import { Import, type ImportState } from '@/models/import';
 
-type Changes = Partial<Pick<Import, 'counts' | 'checkedVersion' | 'error' | 'startedAt' | 'acceptedAt' | 'acceptedById' | 'undoneAt' | 'standing' | 'chosenFormat' | 'encoding' | 'format'>>;
+type Changes = Partial<Pick<Import, 'counts' | 'checkedVersion' | 'error' | 'startedAt' | 'acceptedAt' | 'acceptedById' | 'undoneAt' | 'standing' | 'chosenFormat' | 'encoding' | 'format' | 'columns'>>;
 
 /** Moves an import from one of the given states to another; false when somebody else has moved it first. */
 export async function moveImport(importId: number, from: ImportState[], to: ImportState, changes: Changes = {}, transaction?: Transaction): Promise<boolean> {

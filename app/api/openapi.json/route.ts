@@ -11,6 +11,7 @@ import * as importsImportId from '@/app/api/imports/[importId]/route';
 import * as importsImportIdAccept from '@/app/api/imports/[importId]/accept/route';
 import * as importsImportIdCancel from '@/app/api/imports/[importId]/cancel/route';
 import * as importsImportIdProblems from '@/app/api/imports/[importId]/problems/route';
+import * as importsImportIdColumns from '@/app/api/imports/[importId]/columns/route';
 import * as importsImportIdRead from '@/app/api/imports/[importId]/read/route';
 import * as importsImportIdRecords from '@/app/api/imports/[importId]/records/route';
 import * as importsImportIdSetAside from '@/app/api/imports/[importId]/set-aside/route';
@@ -61,6 +62,7 @@ const routes = {
   '/api/imports/{importId}/accept': importsImportIdAccept,
   '/api/imports/{importId}/cancel': importsImportIdCancel,
   '/api/imports/{importId}/problems': importsImportIdProblems,
+  '/api/imports/{importId}/columns': importsImportIdColumns,
   '/api/imports/{importId}/read': importsImportIdRead,
   '/api/imports/{importId}/records': importsImportIdRecords,
   '/api/imports/{importId}/set-aside': importsImportIdSetAside,

@@ -1,10 +1,13 @@
 import { normaliseDoi, normaliseIsbn, normaliseIssn } from '@/lib/bibliography/identifiers';
+import { type ColumnKind } from '@/lib/bibliography/readers/delimited-columns';
 import { isOthers } from '@/lib/bibliography/names';
 import { tidyText } from '@/lib/bibliography/plain-text';
 import { type Entry, type Format, type Identifiers, type PersonName, type Problem, type ReadLimits, type ReadSummary, type RecordFields } from '@/lib/bibliography/record';
 
 export interface ReaderOptions {
   limits: ReadLimits;
+  /** Of a table: what its columns hold, where their heads do not decide. */
+  columns?: readonly (ColumnKind | null)[];
   onEntry: (entry: Entry) => void;
   onProblem: (problem: Problem) => void;
 }

@@ -1,4 +1,4 @@
-import { delimiters, splitCells, type Delimiter } from '@/lib/bibliography/readers/delimited-rows';
+import { DelimitedRows, delimiters, splitCells, type Delimiter } from '@/lib/bibliography/readers/delimited-rows';
 
 /** What a column of a table can hold. */
 export const columnKinds = [
@@ -6,6 +6,8 @@ export const columnKinds = [
   'url', 'references', 'key', 'affiliations',
 ] as const;
 export type ColumnKind = (typeof columnKinds)[number];
+
+const mostColumns = 1_000;
 
 /** Heads in lower case, letters and digits only. English, German and Spanish; common practice, no source. */
 const heads: Record<ColumnKind, string[]> = {
@@ -49,16 +51,54 @@ export interface TableHead {
   columns: (ColumnKind | null)[];
 }
 
-/** Reads the first line of a table: the delimiter that gives the most known columns. Null when no column tells what a work is. */
-export function readTableHead(line: string): TableHead | null {
+const isTelling = (columns: readonly (ColumnKind | null)[]) => columns.includes('title') || columns.includes('doi');
+
+/**
+ * Reads the first line of a table: the delimiter that gives the most known columns, else the most cells.
+ *
+ * @param chosen what the columns hold, where a person has said so; they must be as many as the line has cells
+ * @returns null when the line is no head of a table
+ */
+export function splitTableHead(line: string, chosen?: readonly (ColumnKind | null)[]): TableHead | null {
   let best: { head: TableHead; known: number } | null = null;
   for (const delimiter of delimiters) {
     const cells = splitCells(line.replace(/^\uFEFF/, ''), delimiter);
-    if (!cells || cells.length < 2 || cells.length > 1_000) continue;
-    const columns = cells.map((cell) => guessColumn(cell));
+    if (!cells || cells.length < 2 || cells.length > mostColumns || (chosen && cells.length !== chosen.length)) continue;
+    const columns = chosen ? [...chosen] : cells.map((cell) => guessColumn(cell));
     const known = columns.filter((kind) => kind !== null).length;
-    if (!columns.includes('title') && !columns.includes('doi')) continue;
-    if (known >= 2 && (!best || known > best.known)) best = { head: { delimiter, heads: cells.map((cell) => cell.trim()), columns }, known };
+    const better = !best || known > best.known || (known === best.known && cells.length > best.head.heads.length);
+    if (better) best = { head: { delimiter, heads: cells.map((cell) => cell.trim()), columns }, known };
   }
   return best?.head ?? null;
 }
+
+/** The head of a table that tells what its works are. Null when no column does, or only one column says anything. */
+export function readTableHead(line: string, chosen?: readonly (ColumnKind | null)[]): TableHead | null {
+  const head = splitTableHead(line, chosen);
+  return head && isTelling(head.columns) && (chosen || head.columns.filter((kind) => kind !== null).length >= 2) ? head : null;
+}
+
+export interface TableSketch extends TableHead {
+  /** First rows, each with as many cells as there are heads. */
+  rows: string[][];
+}
+
+/** Head and first rows of a table, from its beginning. Null when it looks like none. */
+export function sketchTable(beginning: string, most = 5): TableSketch | null {
+  let line = 0;
+  const lines = beginning.split('\n');
+  while (line < lines.length && (lines[line].replace(/^\uFEFF/, '').trim() === '' || isSeparatorLine(lines[line]))) line += 1;
+  if (line === lines.length) return null;
+  const head = splitTableHead(lines[line]);
+  if (!head) return null;
+  const rows: string[][] = [];
+  const reader = new DelimitedRows(head.delimiter, 100_000, ({ cells }) => {
+    if (rows.length < most && cells.some((cell) => cell.trim() !== '')) rows.push(head.heads.map((_, at) => (cells[at] ?? '').trim().slice(0, 200)));
+  }, () => undefined);
+  reader.write(lines.slice(line + 1).join('\n'));
+  reader.end();
+  return { ...head, rows };
+}
+
+/** "sep=;", by which some spreadsheets tell the delimiter. */
+export const isSeparatorLine = (line: string) => /^\uFEFF?"?sep=.{1,2}$/i.test(line);

@@ -7,7 +7,7 @@ import { parseDate, parsePages } from '@/lib/bibliography/dates';
 import { normalisePmid } from '@/lib/bibliography/identifiers';
 import { body, parseListedName } from '@/lib/bibliography/names';
 import { EntryBuilder, ReadSession, type Reader, type ReaderOptions } from '@/lib/bibliography/readers/builder';
-import { readTableHead, type ColumnKind, type TableHead } from '@/lib/bibliography/readers/delimited-columns';
+import { isSeparatorLine, readTableHead, type ColumnKind, type TableHead } from '@/lib/bibliography/readers/delimited-columns';
 import { DelimitedRows, type DelimitedRow } from '@/lib/bibliography/readers/delimited-rows';
 import { type PersonName, type ReadSummary, type WorkType } from '@/lib/bibliography/record';
 
@@ -84,11 +84,11 @@ class DelimitedReader implements Reader {
       const text = end < 0 ? this.beginning : this.beginning.slice(0, end);
       this.linesBefore += 1;
       const rest = end < 0 ? '' : this.beginning.slice(end + 1);
-      if (text.replace(/^\uFEFF/, '').trim() === '' || /^\uFEFF?"?sep=.{1,2}$/i.test(text)) {
+      if (text.replace(/^\uFEFF/, '').trim() === '' || isSeparatorLine(text)) {
         this.beginning = rest;
         continue;
       }
-      this.head = text.length > longestHead ? null : readTableHead(text);
+      this.head = text.length > longestHead ? null : readTableHead(text, this.options.columns);
       if (!this.head) return this.refuse(this.beginning);
       this.beginning = '';
       const tooLong = (line: number) => this.session.problem('error', 'line-too-long', 'The line is too long; the rest of it was left out.', line);

@@ -1,5 +1,5 @@
 import { defaultLimits, type Entry, type Format, type Problem, type ReadLimits, type ReadSummary } from '@/lib/bibliography/record';
-import { type Reader } from '@/lib/bibliography/readers/builder';
+import { type Reader, type ReaderOptions } from '@/lib/bibliography/readers/builder';
 import { createBibtexReader } from '@/lib/bibliography/readers/bibtex';
 import { createCslJsonReader } from '@/lib/bibliography/readers/csl-json';
 import { createDelimitedReader } from '@/lib/bibliography/readers/delimited';
@@ -16,8 +16,8 @@ const readers = { bibtex: createBibtexReader, ris: createRisReader, tagged: crea
  *
  * @param handlers `onEntry` for each entry, `onProblem` for problems that belong to no entry
  */
-export function createReader(format: Format, handlers: { onEntry: (entry: Entry) => void; onProblem: (problem: Problem) => void; limits?: Partial<ReadLimits> }): Reader {
-  return readers[format]({ onEntry: handlers.onEntry, onProblem: handlers.onProblem, limits: { ...defaultLimits, ...handlers.limits } });
+export function createReader(format: Format, handlers: { onEntry: (entry: Entry) => void; onProblem: (problem: Problem) => void; limits?: Partial<ReadLimits>; columns?: ReaderOptions['columns'] }): Reader {
+  return readers[format]({ onEntry: handlers.onEntry, onProblem: handlers.onProblem, limits: { ...defaultLimits, ...handlers.limits }, columns: handlers.columns });
 }
 
 /** Reads a text at once. */

@@ -42,6 +42,8 @@ describe('the head of a table', () => {
     expect(detectFormat(table(head, 'A,B,2001,C,1,2,10.5555/x,'))?.format).toBe('delimited');
     expect(detectFormat(table('sep=;', 'Title;Authors;Year', 'A;B;2001'))?.format).toBe('delimited');
     expect(detectFormat(table('Title,Authors,Year', '"@article{x, TY  - JOUR",B,2001'))?.format).toBe('delimited');
+    expect(detectFormat(table('Title,Who,Year,Shelf', 'A,B,2001,C'))?.format).toBe('delimited');
+    expect(detectFormat(table('Title, year and all', 'of a letter'))).toBeNull();
     expect(detectFormat('Title of the letter, authors unknown, year 2001\n')).toBeNull();
   });
 });

@@ -1,0 +1,30 @@
+import { type ColumnKind } from '@/lib/bibliography/readers/delimited-columns';
+
+/** What a column holds, in words. */
+export const columnWords: Record<ColumnKind, string> = {
+  title: 'title',
+  authors: 'authors',
+  editors: 'editors',
+  year: 'year or date',
+  venue: 'journal or book',
+  venueShort: 'journal, abbreviated',
+  volume: 'volume',
+  issue: 'issue',
+  firstPage: 'first page',
+  lastPage: 'last page',
+  pages: 'pages',
+  articleNumber: 'article number',
+  publisher: 'publisher',
+  place: 'place',
+  doi: 'DOI',
+  pmid: 'PMID',
+  serial: 'ISSN or ISBN',
+  abstract: 'abstract',
+  keywords: 'keywords',
+  language: 'language',
+  type: 'type of work',
+  url: 'link',
+  references: 'cited references',
+  key: 'the record’s own id',
+  affiliations: 'affiliations',
+};
