@@ -5,7 +5,7 @@ import { type ComponentProps, type ReactNode } from 'react';
 export function Table({ caption, children, className }: { caption: string; children: ReactNode; className?: string }) {
   return (
     // Position: sr-only captions must not widen the page from within a scroller.
-    <div role="region" aria-label={caption} tabIndex={0} className="relative overflow-x-auto">
+    <div role="region" aria-label={`${caption}, table`} tabIndex={0} className="relative overflow-x-auto">
       <table className={clsx('w-full border-collapse text-table', className)}>
         <caption className="sr-only">{caption}</caption>
         {children}
