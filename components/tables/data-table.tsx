@@ -86,7 +86,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
   return (
     <div className="grid min-w-0 gap-3">
       {(filters || actions || name) && (
-        <div className="flex flex-wrap items-end justify-between gap-x-4 gap-y-2">
+        <div className="no-print flex flex-wrap items-end justify-between gap-x-4 gap-y-2">
           <div className="flex min-w-0 flex-1 flex-wrap items-end gap-2 max-md:basis-full">{filters}</div>
           <div className="flex flex-wrap gap-2">
             {name && <ColumnChooser columns={columns} shown={visible} onChange={choose} />}
