@@ -1,7 +1,8 @@
 import { type Migration } from '@/lib/db/migrate';
 
 /**
- * Where a variant leads is derived, and written a hundred thousand rows at a time; checking each against the works took longer than writing it.
+ * Where a variant leads is derived, and written a hundred thousand rows at a time, in the transaction that
+ * writes the works themselves.
  * The index stays. tests/integration/catalogue proves that no variant leads to a work that is gone.
  */
 export const up: Migration = async ({ context: database }) => {
