@@ -64,13 +64,15 @@ class DelimitedReader implements Reader {
 
   write(text: string): void {
     if (this.rows) return this.rows.write(text);
-    if (this.failed) return;
-    this.beginning += text;
+    // Of a refused table the text alone is kept, as much of it as of any entry.
+    if (!this.failed) this.beginning += text;
+    else if (this.beginning.length < this.session.limits.rawLength) this.beginning += text.slice(0, this.session.limits.rawLength);
     this.begin(false);
   }
 
   end(): ReadSummary {
-    if (!this.rows && !this.failed) this.begin(true);
+    this.begin(true);
+    if (this.failed) this.refuse(this.beginning);
     this.rows?.end();
     return this.session.summary();
   }
@@ -79,17 +81,19 @@ class DelimitedReader implements Reader {
   private begin(whole: boolean): void {
     while (!this.rows && !this.failed) {
       const end = this.beginning.indexOf('\n');
-      if (end < 0 && !whole && this.beginning.length < longestHead) return;
+      if (end < 0 && !whole && this.beginning.length <= longestHead) return;
       if (end < 0 && this.beginning === '') return;
       const text = end < 0 ? this.beginning : this.beginning.slice(0, end);
       this.linesBefore += 1;
       const rest = end < 0 ? '' : this.beginning.slice(end + 1);
-      if (text.replace(/^\uFEFF/, '').trim() === '' || isSeparatorLine(text)) {
+      const tooLongForHead = text.length > longestHead;
+      if (!tooLongForHead && (text.replace(/^\uFEFF/, '').trim() === '' || isSeparatorLine(text))) {
         this.beginning = rest;
         continue;
       }
-      this.head = text.length > longestHead ? null : readTableHead(text, this.options.columns);
-      if (!this.head) return this.refuse(this.beginning);
+      this.head = tooLongForHead ? null : readTableHead(text, this.options.columns);
+      this.failed = !this.head;
+      if (!this.head) return;
       this.beginning = '';
       const tooLong = (line: number) => this.session.problem('error', 'line-too-long', 'The line is too long; the rest of it was left out.', line);
       this.rows = new DelimitedRows(this.head.delimiter, this.session.limits.fieldLength, (row) => this.take(row), tooLong, this.linesBefore);
@@ -98,8 +102,6 @@ class DelimitedReader implements Reader {
   }
 
   private refuse(text: string): void {
-    this.failed = true;
-    this.beginning = '';
     const builder = new EntryBuilder(this.linesBefore, this.session.limits);
     builder.problem('error', 'no-columns', 'The first line names no column that tells what a work is. Name at least "Title" or "DOI", and one more, e.g. "Authors", "Year", "Journal", "References".');
     this.session.emit((position) => builder.rejected(position, text));

@@ -94,6 +94,20 @@ describe('a table', () => {
     expect(entries[0]).toMatchObject({ kind: 'rejected', line: 1, raw: 'Name,Colour\na,b\nc,d\n', problems: [{ code: 'no-columns' }] });
   });
 
+  it('that is refused keeps its whole text, and one line of 100,000 characters is no head, in whatever pieces they come', () => {
+    const refused = (text: string, size: number) => {
+      const entries: Entry[] = [];
+      const reader = createReader('delimited', { onEntry: (entry) => entries.push(entry), onProblem: () => undefined });
+      for (let at = 0; at < text.length; at += size) reader.write(text.slice(at, at + size));
+      reader.end();
+      return entries.map((entry) => [entry.kind, entry.line, entry.raw.length]);
+    };
+    for (const text of [table('', 'Name,Colour', 'a,b', 'c,d'), `Title,DOI,${'x'.repeat(99_990)}`, `Title,DOI,${'x'.repeat(100_000)}\na,b`, `${' '.repeat(150_000)}\nTitle,DOI\na,10.5555/x\n`, `\n${' '.repeat(150_000)}Title,DOI\na,10.5555/x\n`]) {
+      for (const size of [1_000, 100_000]) expect(refused(text, size), `${text.slice(0, 20).trim()} in pieces of ${size}`).toEqual(refused(text, 1_000_000));
+    }
+    expect(refused(table('', 'Name,Colour', 'a,b'), 3)).toEqual([['rejected', 2, 16]]);
+  });
+
   it('reads the same however it is cut into pieces', () => {
     const text = table('sep=,', '', head, '"Reed ""beds""","Brae A., Okonkwo C.",2001,J,1,2,,"A B, 1990, J, V1, P2"', '"open,2002', 'Bogs,,2003');
     const read = (size: number) => {
